@@ -1,0 +1,1 @@
+export function contentHash(root: string, paths: readonly string[]): string;

@@ -1,0 +1,2 @@
+export function installPackages(root: string, install?: (root: string) => Promise<void>): Promise<void>;
+export function isInstalledAlready(root: string): boolean;
