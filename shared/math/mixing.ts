@@ -1,22 +1,22 @@
-/**
- * Adding light, in stops.
- *
- * Light adds linearly on the subject and on the sensor (H = H1 + H2 + ...), so amounts that are written in stops
- * are turned into factors of two, added, and turned back. The largest amount is taken out of the sum first, so
- * that neither very bright nor very dim parts overflow or vanish.
- */
+import { ANY, inDomain } from './domain';
 
 /**
- * The sum of several lights.
- *
- * s = log2(2^s1 + 2^s2 + ...), computed as m + log2(sum of 2^(si - m)) with m the largest.
- *
- * @param stops s1, s2, ...: each light, in stops from a common reference (EV100 of each works too); any finite
- *   number, at least one
- * @returns the sum, in stops from the same reference
- * @throws RangeError when the list is empty or holds a number that is not finite
- * @example addStops([0, 0]) // 1: two equal lights are one stop more than either
- * @source additivity of exposure, derivation (project handbook, section 10.1)
+ * Adding light, in stops. Light adds linearly on the subject and on the sensor (H = H1 + H2 + ...), so stops are
+ * turned into factors of two, added, and turned back. The largest is taken out of the sum first, so that neither
+ * very bright nor very dim parts overflow or vanish.
+ */
+
+/** Beyond this difference 2^d is no longer a finite number. */
+const WIDEST_STOPS = 1023;
+
+/** A ratio this close to 1 can't be told from 1 in a double. */
+const SMALLEST_RATIO = 1 + Number.EPSILON;
+
+/**
+ * The sum of several lights: s = log2(2^s1 + 2^s2 + ...), computed as m + log2(Σ 2^(si − m)), m the largest.
+ * @param stops s1, s2, ...: stops from a common reference (EV100 works too), finite, at least one
+ * @returns stops from the same reference; addStops([0, 0]) = 1. Throws RangeError outside the domain.
+ * Source: additivity of exposure, derivation (project handbook, section 10.1).
  */
 export function addStops(stops: readonly number[]): number {
   const brightest = largestOf(stops);
@@ -26,15 +26,11 @@ export function addStops(stops: readonly number[]): number {
 }
 
 /**
- * How much of the total each light contributes.
- *
- * share_i = 2^si / (2^s1 + 2^s2 + ...)
- *
- * @param stops s1, s2, ...: each light, in stops from a common reference; any finite number, at least one
- * @returns one share for each light, in the same order, dimensionless, 0 to 1; they add up to 1
- * @throws RangeError when the list is empty or holds a number that is not finite
- * @example sharesOfLight([0, -1]) // [2/3, 1/3]
- * @source additivity of exposure, derivation (project handbook, section 10.4 gives the two-light case)
+ * How much of the total each light contributes: share_i = 2^si / Σ 2^sj.
+ * @param stops as for `addStops`
+ * @returns shares from 0 to 1 in the same order, adding up to 1; sharesOfLight([0, −1]) = [2/3, 1/3].
+ *   Throws RangeError outside the domain.
+ * Source: additivity of exposure, derivation (project handbook, section 10.4, for two lights).
  */
 export function sharesOfLight(stops: readonly number[]): number[] {
   const brightest = largestOf(stops);
@@ -44,93 +40,65 @@ export function sharesOfLight(stops: readonly number[]): number[] {
 }
 
 /**
- * The light that is still needed to bring what is there up to a wanted total.
- *
- * s = log2(2^total - 2^already) = total + log2(1 - 2^(already - total))
- *
- * @param totalStops the wanted total, in stops from a common reference; finite
- * @param alreadyStops what is there already, in stops from the same reference; finite
- * @returns the missing light in stops from the same reference, or null when there is no room for any: what is
- *   there already reaches the total, and no light darkens
- * @throws RangeError when a number is not finite
- * @example stopsStillNeeded(0, -1) // -1: half of the light is there, the other half is missing
- * @source additivity of exposure, derivation (project handbook, section 10.1)
+ * The light that brings what is there up to a wanted total: s = log2(2^T − 2^a) = T + log2(1 − 2^(a − T)).
+ * @param totalStops T, the wanted total, stops from a common reference, finite
+ * @param alreadyStops a, what is there, stops from the same reference, finite
+ * @returns stops from the same reference, or null when what is there already reaches the total, as no light
+ *   darkens; stopsStillNeeded(0, −1) = −1. Throws RangeError outside the domain.
+ * Source: additivity of exposure, derivation (project handbook, section 10.1).
  */
 export function stopsStillNeeded(totalStops: number, alreadyStops: number): number | null {
-  requireFinite(totalStops);
-  requireFinite(alreadyStops);
-  const room = totalStops - alreadyStops;
+  const room = finite(totalStops) - finite(alreadyStops);
   if (room <= 0) return null;
-  // expm1 keeps the digits of 1 - 2^-room when there is hardly any room left.
+  // expm1 keeps the digits of 1 − 2^−room when there is hardly any room left.
   return totalStops + Math.log2(-Math.expm1(-room * Math.LN2));
 }
 
 /**
- * The lighting ratio of a key light that reaches one side of a face and a fill that reaches both:
- * (key + fill):fill, the cinematographers' definition.
- *
- * R = (2^k + 2^f) / 2^f = 1 + 2^(k - f)
- *
- * @param keyStops k: the key at the subject, in stops from a common reference; finite
- * @param fillStops f: the fill at the subject, in stops from the same reference; finite
- * @returns R, dimensionless, above 1 (Infinity when the key is more than 1,023 stops over the fill)
- * @throws RangeError when a number is not finite
- * @example ratioOfStops(1, 0) // 3: one stop between the lights is 3:1
- * @source the (key + fill):fill definition as given by the encyclopaedia article "Lighting ratio" (200 and 100 fc
- *   are 3:1, 800 and 200 fc are 5:1); formula by derivation
+ * Lighting ratio of a key that reaches one side of a face and a fill that reaches both, by the cinematographers'
+ * definition (key + fill):fill: R = 1 + 2^(k − f).
+ * @param keyStops k, the key at the subject, stops from a common reference, finite
+ * @param fillStops f, the fill at the subject, stops from the same reference, within 1,023 stops of k
+ * @returns R, dimensionless, 1 or more (below −52 stops the key no longer shows in it); ratioOfStops(1, 0) = 3.
+ *   Throws RangeError outside the domain.
+ * Source: encyclopaedia, "Lighting ratio" (200 and 100 fc are 3:1, 800 and 200 fc are 5:1); derivation.
  */
 export function ratioOfStops(keyStops: number, fillStops: number): number {
-  requireFinite(keyStops);
-  requireFinite(fillStops);
-  return 1 + 2 ** (keyStops - fillStops);
+  const difference = finite(keyStops) - finite(fillStops);
+  return 1 + 2 ** inDomain('key over fill in stops', difference, -ANY, WIDEST_STOPS);
 }
 
 /**
- * How far the key is over the fill, for a lighting ratio of (key + fill):fill. The other way round of
- * {@link ratioOfStops}.
- *
- * d = log2(R - 1)
- *
- * @param ratio R: (key + fill):fill, dimensionless, above 1
- * @returns d = key minus fill, in stops; negative when the fill is stronger than the key
- * @throws RangeError when the ratio is not a finite number above 1: a lit side is always brighter than a side
- *   that lacks the key
- * @example differenceOfRatio(4) // 1.585: 4:1 needs a key of three times the fill
- * @source derivation from the definition above
+ * How far the key is over the fill for a ratio (key + fill):fill, the inverse of `ratioOfStops`:
+ * d = log2(R − 1).
+ * @param ratio R, dimensionless, above 1: a side that the key also reaches is always the brighter one
+ * @returns d, stops, negative where the fill is stronger; differenceOfRatio(3) = 1. Throws RangeError outside the
+ *   domain. Source: as for `ratioOfStops`.
  */
 export function differenceOfRatio(ratio: number): number {
-  if (!Number.isFinite(ratio) || ratio <= 1) throw new RangeError('A ratio of (key + fill):fill is above 1.');
-  return Math.log2(ratio - 1);
+  return Math.log2(inDomain('a ratio of (key + fill):fill', ratio, SMALLEST_RATIO, ANY) - 1);
 }
 
 /**
- * How much brighter the side that key and fill light is than the side that only the fill lights.
- *
- * s = log2(1 + 2^d) = log2 of the lighting ratio
- *
- * @param differenceStops d: key minus fill, in stops; finite
- * @returns s, in stops, 0 or more
- * @throws RangeError when the number is not finite
- * @example litOverShadowStops(0) // 1: equal lights make the lit side twice as bright
- * @source derivation (project handbook, section 10.2)
+ * How much brighter the side that key and fill light is than the side that only the fill lights: log2(1 + 2^d),
+ * which is log2 of the ratio.
+ * @param differenceStops d, key minus fill, stops, finite
+ * @returns stops, 0 or more; litOverShadowStops(0) = 1. Throws RangeError outside the domain.
+ * Source: derivation (project handbook, section 10.2).
  */
 export function litOverShadowStops(differenceStops: number): number {
-  requireFinite(differenceStops);
-  // log1p keeps the digits of a key that is far weaker than the fill; taking a stronger key out keeps it finite.
-  const over = Math.max(differenceStops, 0);
+  // log1p keeps the digits of a key far weaker than the fill; a stronger key is taken out to stay finite.
+  const over = Math.max(finite(differenceStops), 0);
   return over + Math.log1p(2 ** -Math.abs(differenceStops)) / Math.LN2;
 }
 
 function largestOf(stops: readonly number[]): number {
-  if (stops.length === 0) throw new RangeError('There is no light to add.');
+  if (stops.length === 0) throw new RangeError('there is no light to add');
   let largest = -Infinity;
-  for (const part of stops) {
-    requireFinite(part);
-    if (part > largest) largest = part;
-  }
+  for (const part of stops) largest = Math.max(largest, finite(part));
   return largest;
 }
 
-function requireFinite(stops: number): void {
-  if (!Number.isFinite(stops)) throw new RangeError('An amount of light in stops is a finite number.');
+function finite(stops: number): number {
+  return inDomain('light in stops', stops, -ANY, ANY);
 }
