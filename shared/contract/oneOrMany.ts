@@ -1,0 +1,24 @@
+import { z } from 'zod';
+import type { FieldMeta } from './field';
+
+/**
+ * A value or a list of 1 to `max` such values. No union, so that a fault names the item it stands in.
+ */
+export function oneOrMany<T extends z.ZodType>(item: T, max: number, meta: FieldMeta = {}) {
+  return z
+    .custom<z.output<T> | z.output<T>[]>()
+    .check((payload) => {
+      const value: unknown = payload.value;
+      const many = Array.isArray(value);
+      const parsed = many ? z.array(item).min(1).max(max).safeParse(value) : item.safeParse(value);
+      if (parsed.success) return;
+      for (const issue of parsed.error.issues)
+        payload.issues.push({ ...issue, input: value, path: [...issue.path] } as z.core.$ZodRawIssue);
+    })
+    .meta({ oneOrMany: item, ...((item.meta() ?? {}) as FieldMeta), ...meta });
+}
+
+/** The values of a one-or-many field as a list. */
+export function asList<T>(value: T | readonly T[]): readonly T[] {
+  return Array.isArray(value) ? (value as readonly T[]) : [value as T];
+}
