@@ -73,7 +73,7 @@ export function depthLimits({ focalLengthMm, aperture, distanceM, circleOfConfus
  * @param focalLengthMm f, millimetres, 0.1 to 10,000
  * @param aperture N, f-number, 0.1 to 1,000
  * @param distanceM s, metres to what is in focus, above f, up to 1e6
- * @param pointM D, metres to the point, 1e-4 or more; Infinity is allowed
+ * @param pointM D, metres to the point, 1e-6 or more; Infinity is allowed
  * @returns micrometres, diameter; 85 mm, f/2.8, 3 m, at infinity gives 885. Throws RangeError outside the domain.
  * Source: derivation from the thin lens (project handbook, section 7.2).
  */
@@ -85,7 +85,7 @@ export function blurDiscUm(
 ): number {
   inDomain('focal length in mm', focalLengthMm, 0.1, 1e4);
   inDomain('aperture', aperture, 0.1, 1000);
-  inDomain('distance of the point in m', pointM, 1e-4, Infinity);
+  inDomain('distance of the point in m', pointM, 1e-6, Infinity);
   const focalM = focalLengthMm / 1000;
   const spare = aboveFocalLength(distanceM, focalM) - focalM;
   const away = pointM === Infinity ? 1 : Math.abs(pointM - distanceM) / pointM;
