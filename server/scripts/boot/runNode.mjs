@@ -9,7 +9,8 @@ export function runProgram(program, args, options = {}) {
   return new Promise((resolve, reject) => {
     const child = spawn(program, args, { stdio: ['ignore', 2, 2], ...options });
     const pass = (signal) => child.kill(signal);
-    process.once('SIGINT', pass).once('SIGTERM', pass);
+    // A program in a session of its own is one that must not be interrupted.
+    if (!options.detached) process.once('SIGINT', pass).once('SIGTERM', pass);
     const forget = () => process.off('SIGINT', pass).off('SIGTERM', pass);
     child.once('error', (error) => {
       forget();
