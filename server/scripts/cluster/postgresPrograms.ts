@@ -17,7 +17,7 @@ export function installedPostgres(): PostgresPrograms[] {
     ...debian.map((name) => join(debianFolder, name, 'bin')),
     ...(process.env.PATH ?? '').split(delimiter).filter((folder) => folder !== ''),
   ];
-  const complete = folders.filter((folder) =>
+  const complete = [...new Set(folders)].filter((folder) =>
     ['initdb', 'postgres'].every((name) => existsSync(join(folder, name))),
   );
   return complete.map((folder) => ({ folder, major: majorOf(folder) })).sort((a, b) => b.major - a.major);
@@ -35,7 +35,7 @@ export function postgresPrograms(dataMajor: number | null, dataPlace: string): P
   if (fit) return fit;
   if (dataMajor === null) throw new PeopleError("PostgreSQL's programs (initdb, postgres) were not found");
   throw new PeopleError(
-    `The data in ${dataPlace} are PostgreSQL ${dataMajor}'s, and only ${installed.map(({ major }) => major).join(', ')} is ` +
+    `The data in ${dataPlace} are PostgreSQL ${dataMajor}'s, and only ${[...new Set(installed.map(({ major }) => major))].join(', ')} is ` +
       `installed: install postgresql-${dataMajor}, or move that folder away to begin with an empty database`,
   );
 }

@@ -28,7 +28,7 @@ export async function withClient<Result>(
 }
 
 /** Two roles: one that owns the tables, for migrations, and one that may only read and write rows, for the service. */
-export async function prepareRoles(client: Client, passwords: Passwords): Promise<void> {
+async function prepareRoles(client: Client, passwords: Passwords): Promise<void> {
   const wanted = [
     [OWNER_ROLE, passwords.owner],
     [SERVICE_ROLE, passwords.service],
@@ -40,21 +40,18 @@ export async function prepareRoles(client: Client, passwords: Passwords): Promis
   }
 }
 
-/** Makes the database unless it is there; true when it was made. */
-export async function prepareDatabase(
-  port: number,
-  passwords: Passwords,
-  database: string,
-): Promise<boolean> {
-  const isNew = await withClient(adminUrl(port, passwords), async (client) => {
+// Any number, the same in every process: PostgreSQL refuses when two change the same role at once.
+const PREPARING = 4_310;
+
+/** Makes the roles and the database unless they are there, and says what each role may do. */
+export function prepareDatabase(port: number, passwords: Passwords, database: string): Promise<void> {
+  return withClient(adminUrl(port, passwords), async (client) => {
+    await client.query('SELECT pg_advisory_lock($1)', [PREPARING]);
     await prepareRoles(client, passwords);
     const { rowCount } = await client.query('SELECT 1 FROM pg_database WHERE datname = $1', [database]);
-    if (rowCount) return false;
-    await client.query(`CREATE DATABASE ${database} OWNER ${OWNER_ROLE}`);
-    return true;
+    if (!rowCount) await client.query(`CREATE DATABASE ${database} OWNER ${OWNER_ROLE}`);
+    await withClient(adminUrl(port, passwords, database), (inside) => grantAccess(inside, database));
   });
-  await withClient(adminUrl(port, passwords, database), (client) => grantAccess(client, database));
-  return isNew;
 }
 
 async function grantAccess(client: Client, database: string): Promise<void> {
