@@ -39,6 +39,7 @@ export function miredShift(fromK: number, toK: number): number {
 export function shiftedTemperatureK(sourceK: number, shift: number): number | null {
   const mired = miredOf(sourceK) + inDomain('shift in mired', shift, -1000, 1000);
   if (mired <= MILLION / HOTTEST_K || mired > MILLION / COLDEST_K) return null;
-  // As a factor of the source, so that no shift leaves it as it is, to the last digit.
-  return sourceK / (1 + (sourceK * shift) / MILLION);
+  // As a factor of the source, so that no shift leaves it as it is, to the last digit; at the ends rounding
+  // must not lead outside.
+  return Math.min(HOTTEST_K, Math.max(COLDEST_K, sourceK / (1 + (sourceK * shift) / MILLION)));
 }

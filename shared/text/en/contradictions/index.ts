@@ -1,4 +1,10 @@
 import { exposureContradictions } from './exposure';
+import { filtersContradictions } from './filters';
+import { lightContradictions } from './light';
 
 /** Sentences for faults between fields, by code; each says what was given and what is allowed. */
-export const contradictions = { ...exposureContradictions } as const;
+export const contradictions = {
+  ...exposureContradictions,
+  ...lightContradictions,
+  ...filtersContradictions,
+} as const;
