@@ -1,0 +1,52 @@
+import express, { type Express } from 'express';
+import type { AnyCalculator } from '../shared/contract/defineCalculator';
+import type { Config } from './config';
+import type { Call } from './http/Call';
+import type { Finish } from './http/send';
+import { nothingHere, problemAnswers } from './middleware/problems';
+import { consoleHeaders } from './middleware/surfaceHeaders';
+import { consoleFiles } from './routes/consoleFiles';
+import { docsRoutes } from './routes/docs';
+import { healthRoutes } from './routes/health';
+import { problemPages } from './routes/problemPages';
+import { v1Handler } from './routes/v1';
+import type { Meter } from './services/metering/meter';
+
+export interface AppDependencies {
+  readonly config: Pick<Config, 'publicUrl' | 'trustProxyHops'>;
+  readonly calculators: readonly AnyCalculator[];
+  readonly version: string;
+  readonly meter: Meter;
+  readonly now: () => Date;
+  readonly finish: Finish;
+  readonly onFault: (call: Call, error: unknown) => void;
+  readonly isReady: () => Promise<boolean>;
+  readonly openapi: Record<string, unknown>;
+  /** The built console; null serves the API alone. */
+  readonly clientFolder: string | null;
+}
+
+/** The application: what a request meets, in this order. It never listens. */
+export function createApp(dependencies: AppDependencies): Express {
+  const { config, openapi, clientFolder, isReady } = dependencies;
+  const { publicUrl } = config;
+  const app = express();
+  app.disable('x-powered-by');
+  app.disable('etag');
+  app.set('trust proxy', config.trustProxyHops);
+
+  app.use(v1Handler({ ...dependencies, publicUrl }));
+  app.use(consoleHeaders());
+  app.use('/health', healthRoutes(isReady));
+  app.get('/openapi.json', (_request, response) => {
+    response
+      .set({ 'Cache-Control': 'public, max-age=300', 'Access-Control-Allow-Origin': '*' })
+      .json(openapi);
+  });
+  app.use('/docs', docsRoutes(openapi));
+  app.use('/problems', problemPages());
+  if (clientFolder) app.use(consoleFiles(clientFolder));
+  app.use(nothingHere);
+  app.use(problemAnswers({ ...dependencies, publicUrl }));
+  return app;
+}

@@ -1,0 +1,61 @@
+import type { Call } from './Call';
+
+export type HeaderList = string[];
+
+/** Headers of every answer of the API: nothing of ours may run, be framed or be guessed at. */
+export const API_HEADERS: Readonly<HeaderList> = [
+  'X-Content-Type-Options',
+  'nosniff',
+  'Content-Security-Policy',
+  "default-src 'none'; frame-ancestors 'none'",
+  'Referrer-Policy',
+  'no-referrer',
+  'Cross-Origin-Resource-Policy',
+  'cross-origin',
+  'Strict-Transport-Security',
+  'max-age=31536000; includeSubDomains',
+];
+
+/** What becomes of a finished call: the log line, the usage counts. */
+export type Finish = (call: Call, status: number) => void;
+
+let queue: (() => void)[] = [];
+
+function flush(): void {
+  const ready = queue;
+  queue = [];
+  for (const write of ready) write();
+}
+
+/**
+ * Answers of one turn of the event loop are written together at its end, so that requests that arrive
+ * meanwhile are parsed in one go.
+ */
+function atEndOfTurn(write: () => void): void {
+  if (queue.push(write) === 1) setImmediate(flush);
+}
+
+/** Sends an answer whose body is complete; `headers` are name and value by turns. */
+export function send(call: Call, status: number, headers: HeaderList, body: string, finish: Finish): void {
+  const { response, requestId } = call;
+  atEndOfTurn(() => {
+    if (response.headersSent || response.destroyed) return;
+    const all = ['X-Request-Id', requestId, ...API_HEADERS, ...headers];
+    if (status !== 304 && status !== 204) all.push('Content-Length', String(Buffer.byteLength(body)));
+    response.writeHead(status, all);
+    response.end(call.request.method === 'HEAD' ? undefined : body);
+    finish(call, status);
+  });
+}
+
+/** Sends JSON. */
+export function sendJson(
+  call: Call,
+  status: number,
+  headers: HeaderList,
+  value: unknown,
+  finish: Finish,
+): void {
+  const body = JSON.stringify(value);
+  send(call, status, ['Content-Type', 'application/json; charset=utf-8', ...headers], body, finish);
+}

@@ -1,0 +1,72 @@
+import type { AddressInfo } from 'node:net';
+import { version } from '../package.json';
+import { loadCalculators } from '../shared/calculators';
+import { createApp } from './app';
+import type { Config } from './config';
+import { createHttpServer } from './http/createHttpServer';
+import { buildOpenapi } from './openapi/buildOpenapi';
+import { accessLog } from './services/accessLog';
+import { serviceLog } from './services/logging';
+import { countingPool } from './services/metering/countingPool';
+import { GroupCommitMeter } from './services/metering/groupCommitMeter';
+
+export interface ServeOptions {
+  readonly config: Config;
+  /** The role that owns the tables. */
+  readonly ownerUrl: string;
+  /** The service's own role, which may touch rows only. */
+  readonly serviceUrl: string;
+  readonly clientFolder: string | null;
+  /** Where log lines go; standard output where left out. */
+  readonly logFd?: number;
+}
+
+export interface Service {
+  readonly url: string;
+  stop(): Promise<void>;
+}
+
+/** How long calls under way may take to end when the service stops. */
+const DRAIN_MS = 5_000;
+
+/** Connects, listens, and gives back how to stop: no new calls, those under way end, counts are committed. */
+export async function serve({ config, serviceUrl, clientFolder, logFd }: ServeOptions): Promise<Service> {
+  const { logger, flush } = serviceLog(config, logFd);
+  const pool = countingPool(serviceUrl, config.countingPoolSize, (error) => {
+    logger.warn({ reason: error.message }, 'a counting connection ended');
+  });
+  const meter = new GroupCommitMeter(pool, () => performance.now());
+  const calculators = await loadCalculators();
+  const app = createApp({
+    config,
+    calculators,
+    version,
+    meter,
+    now: () => new Date(),
+    finish: accessLog(logger),
+    onFault: (call, error) => logger.error({ request: call.requestId, err: error }, 'a call failed'),
+    isReady: () =>
+      pool.query('SELECT 1').then(
+        () => true,
+        () => false,
+      ),
+    openapi: buildOpenapi(calculators, { version, publicUrl: config.publicUrl }),
+    clientFolder,
+  });
+  const server = createHttpServer(app);
+  await new Promise<void>((resolve, reject) => {
+    server.once('error', reject);
+    server.listen(config.port, config.host, resolve);
+  });
+  const { port } = server.address() as AddressInfo;
+  const stop = async () => {
+    const closed = new Promise<void>((resolve) => server.close(() => resolve()));
+    server.closeIdleConnections();
+    const cut = setTimeout(() => server.closeAllConnections(), DRAIN_MS);
+    await closed;
+    clearTimeout(cut);
+    await meter.close();
+    flush();
+  };
+  return { url: `http://${config.host}:${port}`, stop };
+}

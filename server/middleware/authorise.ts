@@ -1,0 +1,30 @@
+import { createHash } from 'node:crypto';
+import type { IncomingMessage } from 'node:http';
+import { ProblemError } from '../http/ProblemError';
+import { keyMissing, keyMistyped } from '../policies/refusals';
+import { kindOfKey } from '../services/keys/keyText';
+
+/** A call's key as far as it can be judged without the database. */
+export interface Credentials {
+  readonly keyHash: Buffer;
+  /** The page's site, where the caller is a browser page of another site than the console's own. */
+  readonly site: string | null;
+}
+
+/**
+ * Reads the key of a call; a typing error is found by its checksum.
+ * @throws ProblemError 401 without a key or with one that can't be, 403 for a server key in a browser page
+ */
+export function authorise(request: IncomingMessage, ownOrigin: string): Credentials {
+  const header = request.headers.authorization;
+  if (header === undefined) throw keyMissing();
+  const key = header.slice(0, 7).toLowerCase() === 'bearer ' ? header.slice(7).trim() : '';
+  if (key === '') throw keyMissing();
+  const kind = kindOfKey(key);
+  if (kind === null) throw keyMistyped();
+  const origin = request.headers.origin ?? null;
+  const site = origin === ownOrigin ? null : origin;
+  if (kind === 'server' && site !== null) throw new ProblemError('server_key_in_browser');
+  const keyHash = createHash('sha256').update(key).digest();
+  return { keyHash, site: kind === 'page' ? origin : null };
+}

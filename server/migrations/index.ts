@@ -1,0 +1,6 @@
+import { accountsAndKeys } from './0001-accounts-and-keys';
+import { metering } from './0002-metering';
+import type { Migration } from './migration';
+
+/** All steps of the schema, in order. */
+export const migrations: readonly Migration[] = [accountsAndKeys, metering];

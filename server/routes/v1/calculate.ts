@@ -1,0 +1,51 @@
+import { createHash } from 'node:crypto';
+import { answerFor, parseInput, type AnyCalculator } from '../../../shared/contract/defineCalculator';
+import { decodeQuery, type QueryPairs } from '../../../shared/contract/queryCodec';
+import { ProblemError } from '../../http/ProblemError';
+import type { Operation, Prepared } from './operation';
+
+const BODY_LIMIT = 256 * 1024;
+
+/** A refusal with every fault of the input. */
+function invalidInput(faults: NonNullable<ProblemError['errors']>): ProblemError {
+  const many = faults.length > 1 ? `${faults.length} faults; the first: ` : '';
+  return new ProblemError('invalid_input', `${many}${faults[0]?.detail ?? ''}`, { errors: faults });
+}
+
+function prepared(calculator: AnyCalculator, body: unknown, now: () => Date): Prepared & { input?: unknown } {
+  const needs = [calculator.id];
+  const parsed = parseInput(calculator, body);
+  if ('faults' in parsed) {
+    return { units: 0, needs, problem: invalidInput(parsed.faults), answer: () => null };
+  }
+  const { input } = parsed;
+  const answer = () => answerFor(calculator, input, { now: now() });
+  return { units: calculator.units, needs, input, answer };
+}
+
+/** Weak, from the engine's version and the input with its defaults, so known before the calculation. */
+function etagOf(calculator: AnyCalculator, input: unknown, version: string): string {
+  const hash = createHash('sha256').update(calculator.id).update(JSON.stringify(input)).digest('base64url');
+  return `W/"${version}-${hash.slice(0, 22)}"`;
+}
+
+/** The operations of one calculator: POST always, GET where its required fields are scalars. */
+export function calculatorOperations(
+  calculator: AnyCalculator,
+  { version, now }: { version: string; now: () => Date },
+): Operation[] {
+  const path = `/v1/${calculator.id}`;
+  const shared = { path, name: calculator.id, access: 'key', bodyLimit: BODY_LIMIT } as const;
+  const post: Operation = { ...shared, method: 'POST', prepare: (body) => prepared(calculator, body, now) };
+  if (!calculator.answersGet) return [post];
+  const get: Operation = {
+    ...shared,
+    method: 'GET',
+    prepare: (pairs) => {
+      const body = decodeQuery(pairs as QueryPairs, calculator.fields);
+      const ready = prepared(calculator, body, now);
+      return ready.problem ? ready : { ...ready, etag: etagOf(calculator, ready.input, version) };
+    },
+  };
+  return [post, get];
+}

@@ -1,0 +1,87 @@
+import type pg from 'pg';
+import { MeterUnavailable, type Ask, type Decision, type Meter, type Standing } from './meter';
+import { decisionsOf, TAKE, takeParameters, type TakeRow } from './takeStatement';
+
+interface Waiter {
+  readonly ask: Ask;
+  readonly resolve: (decision: Decision) => void;
+  readonly reject: (error: Error) => void;
+}
+
+/** Calls in one statement; more would make a single lock last too long. */
+const BATCH_MAX = 512;
+/** After a failure, calls are turned away for this long before one batch tries again. */
+const PAUSE_MS = 400;
+const RETRY_AFTER_S = 1;
+
+/**
+ * Counts by group commit: calls that arrive while a statement is under way join the next one, so that one
+ * statement and one commit decide many calls. Each call is decided before it is served:
+ * - no call beyond a limit is ever granted, whatever the number of processes;
+ * - a process that dies loses no count of a call that it served; calls in the statement under way may be
+ *   counted though not served;
+ * - a database that can't be reached means no answer (MeterUnavailable), never an uncounted one.
+ */
+export class GroupCommitMeter implements Meter {
+  private waiting: Waiter[] = [];
+  private isUnderWay = false;
+  private pausedUntil = 0;
+  private readonly idle: (() => void)[] = [];
+
+  /**
+   * @param pool connections with short time-outs, apart from the console's
+   * @param clock monotonic milliseconds, for the pause after a failure
+   */
+  constructor(
+    private readonly pool: pg.Pool,
+    private readonly clock: () => number,
+  ) {}
+
+  take(ask: Ask): Promise<Decision> {
+    if (this.clock() < this.pausedUntil) return Promise.reject(new MeterUnavailable(RETRY_AFTER_S));
+    return new Promise((resolve, reject) => {
+      this.waiting.push({ ask, resolve, reject });
+      if (!this.isUnderWay) {
+        this.isUnderWay = true;
+        // The calls of this turn of the event loop go together.
+        setImmediate(() => void this.run());
+      }
+    });
+  }
+
+  giveBack(standing: Standing, units: number): void {
+    if (units === 0) return;
+    this.pool
+      .query('SELECT meter_give_back($1, $2, $3, $4)', [
+        standing.accountId,
+        standing.keyId,
+        standing.at,
+        units,
+      ])
+      // A refund that fails leaves the customer charged for our fault; the 500 is in the log with its request.
+      .catch(() => undefined);
+  }
+
+  async close(): Promise<void> {
+    if (this.isUnderWay) await new Promise<void>((resolve) => this.idle.push(resolve));
+    await this.pool.end();
+  }
+
+  private async run(): Promise<void> {
+    while (this.waiting.length > 0) {
+      const batch = this.waiting.splice(0, BATCH_MAX);
+      try {
+        const parameters = takeParameters(batch.map(({ ask }) => ask));
+        const { rows } = await this.pool.query<TakeRow>({ name: 'take', text: TAKE, values: parameters });
+        const decisions = decisionsOf(rows[0] as TakeRow, parameters[1] as number[]);
+        batch.forEach(({ resolve }, i) => resolve(decisions[i] as Decision));
+      } catch (error) {
+        this.pausedUntil = this.clock() + PAUSE_MS;
+        const failed = [...batch, ...this.waiting.splice(0)];
+        for (const { reject } of failed) reject(new MeterUnavailable(RETRY_AFTER_S, { cause: error }));
+      }
+    }
+    this.isUnderWay = false;
+    this.idle.splice(0).forEach((resolve) => resolve());
+  }
+}
