@@ -13,7 +13,16 @@ export const calculatorList: readonly CalculatorEntry[] = [
   { id: 'exposure/solve', title: 'Missing setting', load: async () => (await import('./exposure/solve')).exposureSolve },
   { id: 'exposure/equivalents', title: 'Equivalent settings', load: async () => (await import('./exposure/equivalents')).exposureEquivalents },
   { id: 'exposure/difference', title: 'Difference of two settings', load: async () => (await import('./exposure/difference')).exposureDifference },
+  { id: 'exposure/long', title: 'Long exposure on film', load: async () => (await import('./exposure/long')).exposureLong },
+  { id: 'exposure/handheld', title: 'Hand-held limit', load: async () => (await import('./exposure/handheld')).exposureHandheld },
+  { id: 'exposure/depth', title: 'Depth of field', load: async () => (await import('./exposure/depth')).exposureDepth },
   { id: 'light/convert', title: 'Light in three units', load: async () => (await import('./light/convert')).lightConvert },
+  { id: 'light/scenes', title: 'Scenes and their light', load: async () => (await import('./light/scenes')).lightScenes },
+  { id: 'light/add', title: 'Adding light', load: async () => (await import('./light/add')).lightAdd },
+  { id: 'light/ratio', title: 'Key to fill', load: async () => (await import('./light/ratio')).lightRatio },
+  { id: 'light/flicker', title: 'Mains flicker', load: async () => (await import('./light/flicker')).lightFlicker },
+  { id: 'filters/density', title: 'Neutral density', load: async () => (await import('./filters/density')).filtersDensity },
+  { id: 'filters/gel', title: 'Gel for a light', load: async () => (await import('./filters/gel')).filtersGel },
 ];
 
 /** Loads every calculator, in the list's order. */

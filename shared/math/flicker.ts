@@ -9,7 +9,8 @@ import { inDomain } from './domain';
  */
 
 /** How much unevenness shows. */
-export type FlickerRisk = 'none' | 'slight' | 'clear' | 'strong';
+export const FLICKER_RISKS = ['none', 'slight', 'clear', 'strong'] as const;
+export type FlickerRisk = (typeof FLICKER_RISKS)[number];
 
 /** Upper ends in stops of what does not show, shows a little, shows. Common practice, no source. */
 const RISK_ENDS_STOPS = { none: 0.05, slight: 1 / 3, clear: 1 } as const;
@@ -20,12 +21,12 @@ const WHOLE = 1e-9;
 /**
  * Cycles of ripple in an exposure: c = 2·f·t.
  * @param mainsHz f, hertz, 1 to 10,000
- * @param shutterS t, seconds, 1e-7 to 1e6
+ * @param shutterS t, seconds, 0 to 1e6
  * @returns cycles; 50 Hz for 1/100 s is 1. Throws RangeError outside the domain.
  * Source: power is the square of a sine, which has twice its frequency; derivation.
  */
 export function rippleCycles(mainsHz: number, shutterS: number): number {
-  return 2 * inDomain('mains in Hz', mainsHz, 1, 1e4) * inDomain('shutter in s', shutterS, 1e-7, 1e6);
+  return 2 * inDomain('mains in Hz', mainsHz, 1, 1e4) * inDomain('shutter in s', shutterS, 0, 1e6);
 }
 
 /** Inverse of `rippleCycles` for the time: t = c/(2f) seconds. One cycle at 60 Hz takes 1/120 s. */

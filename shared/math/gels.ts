@@ -1,9 +1,12 @@
 import { stopsOfTransmittance } from './density';
 import { inDomain } from './domain';
 
+export const GEL_STRENGTHS = ['eighth', 'quarter', 'half', 'three quarters', 'full'] as const;
+export const GEL_SERIES_NAMES = ['deep daylight', 'daylight'] as const;
+
 /** One sheet of warming (orange) gel as it is sold: its shift, the light it lets through, and what that costs. */
 export interface GelStrength {
-  readonly strength: 'eighth' | 'quarter' | 'half' | 'three quarters' | 'full';
+  readonly strength: (typeof GEL_STRENGTHS)[number];
   readonly miredShift: number;
   readonly transmittance: number;
   readonly lossStops: number;
@@ -11,7 +14,7 @@ export interface GelStrength {
 
 /** A maker's series; sheets of different series share their names but not their shifts. */
 export interface GelSeries {
-  readonly series: 'deep daylight' | 'daylight';
+  readonly series: (typeof GEL_SERIES_NAMES)[number];
   /** What the full sheet is made to turn into what, in kelvin. */
   readonly nominalFromK: number;
   readonly nominalToK: number;

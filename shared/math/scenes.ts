@@ -8,8 +8,17 @@ export interface Scene {
   readonly ev100High: number;
 }
 
-export type SceneGroup =
-  'day' | 'sky_at_sunset' | 'moon_and_aurora' | 'town_after_dark' | 'grounds_after_dark' | 'indoors';
+/** Groups of scenes, in the list's order. */
+export const SCENE_GROUPS = [
+  'day',
+  'sky_at_sunset',
+  'moon_and_aurora',
+  'town_after_dark',
+  'grounds_after_dark',
+  'indoors',
+] as const;
+
+export type SceneGroup = (typeof SCENE_GROUPS)[number];
 
 /** Where the numbers come from; grouping, codes and words are our own. */
 export const SCENE_SOURCE =
