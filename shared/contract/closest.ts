@@ -19,6 +19,8 @@ export function closest(word: string, known: readonly string[]): string | undefi
   let best: string | undefined;
   let least = Math.max(1, Math.floor(word.length / 3)) + 1;
   for (const name of known) {
+    // The distance is never less than the difference in length.
+    if (Math.abs(name.length - word.length) >= least) continue;
     const distance = editDistance(lower, name.toLowerCase());
     if (distance < least) [best, least] = [name, distance];
   }

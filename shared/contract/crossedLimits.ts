@@ -1,6 +1,7 @@
 import type { z } from 'zod';
-import { sayFault } from '../text';
-import { numberOfSetting, type SettingIn } from './settingIn';
+import { contradictionAt, type FoundContradiction } from './contradictionAt';
+import { exactOf, type Reading } from './settings';
+import type { SettingIn } from './settingIn';
 
 const PAIRS = [
   ['aperture', 'apertureMin', 'apertureMax'],
@@ -8,21 +9,24 @@ const PAIRS = [
   ['iso', 'isoMin', 'isoMax'],
 ] as const;
 
-/** A check that no lower limit in `limits` lies above its upper one. */
+interface WithLimits extends Reading {
+  readonly limits?: Record<string, SettingIn | undefined>;
+}
+
+function crossed({ limits, ...reading }: WithLimits): FoundContradiction[] {
+  return PAIRS.flatMap(([kind, low, high]) => {
+    const [from, to] = [limits?.[low], limits?.[high]];
+    if (from === undefined || to === undefined) return [];
+    if (exactOf(kind, from, reading) <= exactOf(kind, to, reading)) return [];
+    return [{ code: 'limits_crossed' as const, path: ['limits', high], params: { low, high, from, to } }];
+  });
+}
+
+/**
+ * A check that no lower limit in `limits` lies above its upper one. It compares the exact values that the limits
+ * mean, since a mark may stand on the other side of a number than its own digits do: "1/125" is 1/128 s.
+ */
 export function crossedLimits<T extends z.ZodType>(schema: T): T {
-  return schema.check((payload) => {
-    const { limits } = payload.value as { limits?: Record<string, SettingIn | undefined> };
-    for (const [kind, low, high] of PAIRS) {
-      const [from, to] = [limits?.[low], limits?.[high]];
-      if (from === undefined || to === undefined) continue;
-      if (numberOfSetting(kind, from) <= numberOfSetting(kind, to)) continue;
-      payload.issues.push({
-        code: 'custom',
-        input: to,
-        path: ['limits', high],
-        message: sayFault('limits_crossed', { low, high }),
-        params: { fault: 'contradiction', code: 'limits_crossed' },
-      });
-    }
-  }) as T;
+  const find = (value: z.output<T>) => crossed(value as WithLimits);
+  return contradictionAt<T>(find, ['limits', 'readAs', 'scale'])(schema);
 }

@@ -1,5 +1,5 @@
 import type { z } from 'zod';
-import type { Field, FieldMeta } from './field';
+import type { Field, FieldMeta, SettingKind, TextFormat } from './field';
 
 interface Peeled {
   schema: z.ZodType;
@@ -15,6 +15,7 @@ interface LooseDef {
   shape?: Record<string, z.ZodType>;
   element?: z.ZodType;
   entries?: Record<string, string>;
+  format?: string;
 }
 
 /** A check as zod keeps it: bounds of numbers, lengths of lists. */
@@ -38,7 +39,7 @@ function peel(schema: z.ZodType): Peeled {
     const def = defOf(inner);
     if (!def.innerType) return { schema: inner, meta, required, defaultValue };
     if (def.type === 'optional' || def.type === 'default' || def.type === 'prefault') required = false;
-    if (def.type === 'default') defaultValue = def.defaultValue;
+    if (def.type === 'default' || def.type === 'prefault') defaultValue = def.defaultValue;
     inner = def.innerType;
     meta = { ...((inner.meta() ?? {}) as FieldMeta), ...meta };
   }
@@ -72,16 +73,27 @@ function ofList(schema: z.ZodType): Partial<Field> {
   };
 }
 
+/** A power of 0 is no flash, so that bound alone is not allowed itself. */
+function ofSetting(setting: SettingKind, { range }: FieldMeta): Partial<Field> {
+  const minimumIsExcluded = setting === 'power';
+  return { kind: 'setting', setting, minimum: range?.[0], maximum: range?.[1], minimumIsExcluded };
+}
+
+const formatOf = ({ format }: LooseDef): TextFormat | undefined =>
+  format === 'datetime' || format === 'date' ? format : undefined;
+
 function ofType(schema: z.ZodType, meta: FieldMeta): Partial<Field> {
-  if (meta.setting)
-    return { kind: 'setting', setting: meta.setting, minimum: meta.range?.[0], maximum: meta.range?.[1] };
-  if (meta.oneOrMany) return { kind: 'oneOrMany', item: describeField('item', meta.oneOrMany) };
+  if (meta.setting) return ofSetting(meta.setting, meta);
+  if (meta.oneOrMany) {
+    const item = describeField('item', meta.oneOrMany);
+    return { kind: 'oneOrMany', item, minItems: 1, maxItems: meta.maxItems };
+  }
   const def = defOf(schema);
   if (def.type === 'number') return ofNumber(schema);
   if (def.type === 'array') return ofList(schema);
   if (def.type === 'object') return { kind: 'group', fields: describeFields(schema) };
   if (def.type === 'enum') return { kind: 'choice', choices: Object.values(def.entries ?? {}) };
-  return { kind: def.type === 'boolean' ? 'boolean' : 'text' };
+  return def.type === 'boolean' ? { kind: 'boolean' } : { kind: 'text', format: formatOf(def) };
 }
 
 /** Describes one schema as a field of the given name. */

@@ -31,5 +31,5 @@ export function givenOf(value: object, fields: readonly string[]): string[] {
 }
 
 function isObject(value: unknown): value is object {
-  return typeof value === 'object' && value !== null;
+  return typeof value === 'object' && value !== null && !Array.isArray(value);
 }

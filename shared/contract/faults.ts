@@ -3,7 +3,6 @@ import { faults as sentences, wanted } from '../text';
 import type { Field } from './field';
 import { givenOf } from './exactlyOne';
 import { closest } from './closest';
-import { SETTING_RANGES } from './settingIn';
 
 /** One fault in a request: where, a stable code, and a sentence that says what is allowed. */
 export interface Fault {
@@ -14,6 +13,9 @@ export interface Fault {
 
 type Issue = z.core.$ZodIssue;
 type Path = readonly PropertyKey[];
+/** So many unknown names get a suggestion; in a body of thousands nobody reads them, and each costs time. */
+const MOST_SUGGESTIONS = 20;
+
 type Params = { fault?: string; code?: string; fields?: readonly string[]; count?: number };
 
 /** A JSON Pointer (RFC 6901) of a path. */
@@ -47,7 +49,7 @@ function wantedBy(field: Field): string {
   if (field.kind === 'choice') return wanted.choice({ choices: field.choices ?? [] });
   if (field.kind === 'oneOrMany')
     return `${field.item ? wantedBy(field.item) : 'a value'}, or a list of such`;
-  return wanted[field.kind]();
+  return field.format ? wanted[field.format]() : wanted[field.kind]();
 }
 
 function nameOf(field: Field | undefined, path: Path): string {
@@ -56,16 +58,19 @@ function nameOf(field: Field | undefined, path: Path): string {
   return field?.title ?? (last === undefined ? 'The body' : String(last));
 }
 
+/** The field that a lone value of a one-or-many field is judged by. */
+const scalarOf = (field: Field | undefined) => (field?.kind === 'oneOrMany' ? field.item : field);
+
 function outOfRange(issue: Issue, field: Field | undefined, title: string, given: unknown): string {
-  const setting = field?.setting && SETTING_RANGES[field.setting];
-  const bound = issue as { minimum?: number; maximum?: number; inclusive?: boolean };
+  const scalar = scalarOf(field);
+  const bound = issue as { minimum?: number; maximum?: number };
   return sentences.out_of_range({
     title,
     given,
-    minimum: field?.minimum ?? setting?.[0] ?? bound.minimum,
-    maximum: field?.maximum ?? setting?.[1] ?? bound.maximum,
-    isAbove: field?.minimumIsExcluded ?? field?.setting === 'power',
-    unit: typeof given === 'string' ? undefined : field?.unit,
+    minimum: scalar?.minimum ?? bound.minimum,
+    maximum: scalar?.maximum ?? bound.maximum,
+    isAbove: scalar?.minimumIsExcluded,
+    unit: scalar?.unit,
   });
 }
 
@@ -74,13 +79,14 @@ function ofSize(issue: Issue, field: Field | undefined, title: string, given: un
   if (origin !== 'array' && origin !== 'string')
     return ['out_of_range', outOfRange(issue, field, title, given)];
   const length = (given as ArrayLike<unknown>).length;
-  if (issue.code === 'too_small')
-    return [
-      'too_few_items',
-      sentences.too_few_items({ title, minimum: Number(issue.minimum), given: length }),
-    ];
+  const isText = origin === 'string';
+  if (issue.code === 'too_small') {
+    const code = isText ? 'too_short' : 'too_few_items';
+    return [code, sentences[code]({ title, minimum: Number(issue.minimum), given: length })];
+  }
+  const code = isText ? 'too_long' : 'too_many_items';
   const maximum = Number((issue as { maximum?: number }).maximum);
-  return ['too_many_items', sentences.too_many_items({ title, maximum, given: length })];
+  return [code, sentences[code]({ title, maximum, given: length })];
 }
 
 function ofCustom(issue: Issue, field: Field | undefined, title: string, given: unknown): [string, string] {
@@ -93,15 +99,19 @@ function ofCustom(issue: Issue, field: Field | undefined, title: string, given: 
   return ['not_valid', sentences.not_valid({ title, given })];
 }
 
+/** JSON's 1e999 is read as infinity: a number, and out of every range. */
+const isInfinite = (given: unknown) => given === Infinity || given === -Infinity;
+
 function explain(issue: Issue, field: Field | undefined, title: string, given: unknown): [string, string] {
   if (given === undefined && issue.code !== 'custom')
     return ['missing', sentences.missing({ title, allowed: field && wantedBy(field) })];
+  const allowed = field ? wantedBy(field) : wanted.group();
   switch (issue.code) {
     case 'invalid_type':
-      return [
-        'wrong_type',
-        sentences.wrong_type({ title, given, wanted: field ? wantedBy(field) : wanted.group() }),
-      ];
+      if (isInfinite(given)) return ['out_of_range', outOfRange(issue, field, title, given)];
+      return ['wrong_type', sentences.wrong_type({ title, given, wanted: allowed })];
+    case 'invalid_format':
+      return ['wrong_format', sentences.wrong_format({ title, given, wanted: allowed })];
     case 'too_small':
     case 'too_big':
       return ofSize(issue, field, title, given);
@@ -119,10 +129,14 @@ function unknownFields(issue: Issue & { keys: string[] }, fields: readonly Field
   const known =
     (path.length ? (fieldAt(fields, path)?.fields ?? fieldAt(fields, path)?.item?.fields) : fields) ?? [];
   const names = known.map((field) => field.name);
-  return issue.keys.map((key) => ({
+  return issue.keys.map((key, i) => ({
     pointer: pointerOf([...path, key]),
     code: 'unknown_field',
-    detail: sentences.unknown_field({ field: key, suggestion: closest(key, names), known: names }),
+    detail: sentences.unknown_field({
+      field: key,
+      suggestion: i < MOST_SUGGESTIONS ? closest(key, names) : undefined,
+      known: names,
+    }),
   }));
 }
 
@@ -140,9 +154,9 @@ function ofAlternatives(params: Params, input: unknown, path: Path): Fault[] {
   return blamed.map((field) => ({ pointer: pointerOf([...path, field]), code: `${fault}`, detail }));
 }
 
-/** All faults of a request as people read them, in the order in which the schema found them. */
+/** All faults of a request as people read them, each once, in the order in which the schema found them. */
 export function faultsOf(issues: readonly Issue[], fields: readonly Field[], input: unknown): Fault[] {
-  return issues.flatMap((issue) => {
+  const all = issues.flatMap((issue) => {
     if (issue.code === 'unrecognized_keys') return unknownFields(issue, fields, issue.path);
     const params = (issue as { params?: Params }).params;
     if (params?.fault === 'exactly' || params?.fault === 'at_most_one')
@@ -151,4 +165,6 @@ export function faultsOf(issues: readonly Issue[], fields: readonly Field[], inp
     const [code, detail] = explain(issue, field, nameOf(field, issue.path), valueAt(input, issue.path));
     return [{ pointer: pointerOf(issue.path), code, detail }];
   });
+  // A whole number beyond what a double holds is told twice by the schema.
+  return [...new Map(all.map((fault) => [`${fault.pointer} ${fault.code} ${fault.detail}`, fault])).values()];
 }

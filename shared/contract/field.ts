@@ -41,7 +41,12 @@ export interface FieldMeta {
   readonly step?: number;
   /** The alternatives of a one-or-many field. */
   readonly oneOrMany?: z.ZodType;
+  /** The longest list of a one-or-many field. */
+  readonly maxItems?: number;
 }
+
+/** How a text is written, where that is fixed. */
+export type TextFormat = 'datetime' | 'date';
 
 export type FieldKind = 'number' | 'setting' | 'choice' | 'boolean' | 'text' | 'group' | 'list' | 'oneOrMany';
 
@@ -62,6 +67,7 @@ export interface Field {
   readonly minimumIsExcluded?: boolean;
   readonly isInteger?: boolean;
   readonly choices?: readonly string[];
+  readonly format?: TextFormat;
   /** Fields of a group. */
   readonly fields?: readonly Field[];
   /** What a list holds. */

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import type { SettingLimits } from '../math/equivalents';
+import type { Mark } from '../math/marks';
 import type { FieldMeta } from './field';
 import { exactOf, type Reading } from './settings';
 import { apertureIn, isoIn, shutterIn, type SettingIn } from './settingIn';
@@ -31,16 +32,32 @@ type Given = Partial<
   Record<'apertureMin' | 'apertureMax' | 'shutterFastest' | 'shutterSlowest' | 'isoMin' | 'isoMax', SettingIn>
 >;
 
-/** Limits as exact values, usual gear where a limit is not given. */
-export function exactLimits(given: Given, reading: Reading): SettingLimits {
-  const read = (kind: 'aperture' | 'shutter' | 'iso', value: SettingIn | undefined, usual: number) =>
-    value === undefined ? usual : exactOf(kind, value, reading);
+/** Usual gear, widened so that it holds the settings in use: who sets ISO 25 has a camera that offers it. */
+export function usualGearFor(used: { aperture: Mark; shutter: Mark; iso: Mark }): SettingLimits {
   return {
-    apertureMin: read('aperture', given.apertureMin, USUAL_GEAR.apertureMin),
-    apertureMax: read('aperture', given.apertureMax, USUAL_GEAR.apertureMax),
-    shutterFastestS: read('shutter', given.shutterFastest, USUAL_GEAR.shutterFastestS),
-    shutterSlowestS: read('shutter', given.shutterSlowest, USUAL_GEAR.shutterSlowestS),
-    isoMin: read('iso', given.isoMin, USUAL_GEAR.isoMin),
-    isoMax: read('iso', given.isoMax, USUAL_GEAR.isoMax),
+    apertureMin: Math.min(USUAL_GEAR.apertureMin, used.aperture.exact),
+    apertureMax: Math.max(USUAL_GEAR.apertureMax, used.aperture.exact),
+    shutterFastestS: Math.min(USUAL_GEAR.shutterFastestS, used.shutter.exact),
+    shutterSlowestS: Math.max(USUAL_GEAR.shutterSlowestS, used.shutter.exact),
+    isoMin: Math.min(USUAL_GEAR.isoMin, used.iso.exact),
+    isoMax: Math.max(USUAL_GEAR.isoMax, used.iso.exact),
+  };
+}
+
+/** Limits as exact values, those of usual gear where a limit is not given. */
+export function exactLimits(
+  given: Given,
+  reading: Reading,
+  usual: SettingLimits = USUAL_GEAR,
+): SettingLimits {
+  const read = (kind: 'aperture' | 'shutter' | 'iso', value: SettingIn | undefined, otherwise: number) =>
+    value === undefined ? otherwise : exactOf(kind, value, reading);
+  return {
+    apertureMin: read('aperture', given.apertureMin, usual.apertureMin),
+    apertureMax: read('aperture', given.apertureMax, usual.apertureMax),
+    shutterFastestS: read('shutter', given.shutterFastest, usual.shutterFastestS),
+    shutterSlowestS: read('shutter', given.shutterSlowest, usual.shutterSlowestS),
+    isoMin: read('iso', given.isoMin, usual.isoMin),
+    isoMax: read('iso', given.isoMax, usual.isoMax),
   };
 }

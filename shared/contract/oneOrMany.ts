@@ -2,7 +2,8 @@ import { z } from 'zod';
 import type { FieldMeta } from './field';
 
 /**
- * A value or a list of 1 to `max` such values. No union, so that a fault names the item it stands in.
+ * A value or a list of 1 to `max` such values, with the item's own defaults filled in. No union, so that a fault
+ * names the item it stands in.
  */
 export function oneOrMany<T extends z.ZodType>(item: T, max: number, meta: FieldMeta = {}) {
   return z
@@ -11,11 +12,14 @@ export function oneOrMany<T extends z.ZodType>(item: T, max: number, meta: Field
       const value: unknown = payload.value;
       const many = Array.isArray(value);
       const parsed = many ? z.array(item).min(1).max(max).safeParse(value) : item.safeParse(value);
-      if (parsed.success) return;
+      if (parsed.success) {
+        payload.value = parsed.data;
+        return;
+      }
       for (const issue of parsed.error.issues)
         payload.issues.push({ ...issue, input: value, path: [...issue.path] } as z.core.$ZodRawIssue);
     })
-    .meta({ oneOrMany: item, ...((item.meta() ?? {}) as FieldMeta), ...meta });
+    .meta({ oneOrMany: item, maxItems: max, ...((item.meta() ?? {}) as FieldMeta), ...meta });
 }
 
 /** The values of a one-or-many field as a list. */

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { powerOfText } from '../math/powerMarks';
+import { POWER_FORM, powerOfText } from '../math/powerMarks';
 import type { FieldMeta, SettingKind } from './field';
 
 /** A setting as it is written in a request: a number, or text as on the camera. */
@@ -14,11 +14,14 @@ export const SETTING_RANGES: Record<SettingKind, readonly [number, number]> = {
 };
 
 const NUMBER = '(\\d+(?:\\.\\d+)?|\\.\\d+)';
+const whole = (form: string) => `^\\s*${form}\\s*$`;
+
+/** How a setting is written as text; null where it is a number only. */
 export const SETTING_PATTERNS: Record<SettingKind, string | null> = {
-  aperture: `^[fF]/?${NUMBER}$`,
-  shutter: `^${NUMBER}(?:/${NUMBER})?( ?s)?$`,
+  aperture: whole(`[fF]/?${NUMBER}`),
+  shutter: whole(`${NUMBER}(?:/${NUMBER})?(?: ?s)?`),
   iso: null,
-  power: '^1/\\d+(?:\\.\\d+)?(?:\\+[12]/[23])?$',
+  power: whole(POWER_FORM),
 };
 const APERTURE = new RegExp(SETTING_PATTERNS.aperture ?? '');
 const SHUTTER = new RegExp(SETTING_PATTERNS.shutter ?? '');
@@ -45,7 +48,7 @@ export function numberOfSetting(kind: SettingKind, value: SettingIn): number {
   if (typeof value === 'number') return value;
   if (kind === 'power') return powerOfText(value) ?? Number.NaN;
   if (kind === 'iso') return Number.NaN;
-  const match = (kind === 'aperture' ? APERTURE : SHUTTER).exec(value.trim());
+  const match = (kind === 'aperture' ? APERTURE : SHUTTER).exec(value);
   if (!match) return Number.NaN;
   const number = Number(match[1]) / (kind === 'shutter' ? Number(match[2] ?? 1) : 1);
   return Number.isFinite(number) ? number : Number.NaN;
@@ -66,7 +69,8 @@ function settingIn(kind: SettingKind, meta: FieldMeta = {}) {
       if (value === undefined) return void add('missing');
       if (typeof value !== 'number' && typeof value !== 'string') return void add('wrong_type');
       const number = numberOfSetting(kind, value);
-      if (Number.isNaN(number)) add(typeof value === 'string' ? 'not_a_setting' : 'wrong_type');
+      const isText = typeof value === 'string' && kind !== 'iso';
+      if (Number.isNaN(number)) add(isText ? 'not_a_setting' : 'wrong_type');
       else if (!isInRange(kind, number, range)) add('out_of_range');
     })
     .meta({

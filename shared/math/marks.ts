@@ -1,3 +1,4 @@
+import { ANY, inDomain, SMALLEST } from './domain';
 import { HALVES, SLOWEST_MARKED_S, THIRDS, type LabelRun, type MarkedKind, type Scale } from './markTables';
 
 export type { MarkedKind, Scale } from './markTables';
@@ -6,6 +7,7 @@ export type { MarkedKind, Scale } from './markTables';
 export interface Mark {
   readonly label: string;
   readonly exact: number;
+  /** Whole steps, but for times of whole seconds beyond the slowest marking, which lie where they lie. */
   readonly position: number;
 }
 
@@ -88,22 +90,33 @@ function dressed(kind: MarkedKind, plain: string): string {
   return kind === 'shutter' && !plain.startsWith('1/') ? `${plain}s` : plain;
 }
 
-/** Times beyond the slowest marking are named by their whole seconds. */
-function secondsMark(exact: number, rounding: Rounding): Mark {
-  const whole =
-    rounding === 'nearest' ? Math.round(exact) : rounding === 'ceil' ? Math.floor(exact) : Math.ceil(exact);
-  return { label: `${whole}s`, exact: whole, position: Number.NaN };
+/** Whole seconds on the wanted side; a count that is whole but for rounding errors stays as it is. */
+function wholeSeconds(exact: number, rounding: Rounding): number {
+  const near = Math.round(exact);
+  if (Math.abs(exact - near) <= ON_POSITION * exact) return near;
+  if (rounding === 'nearest') return Math.ceil(exact - 0.5);
+  return rounding === 'ceil' ? Math.floor(exact) : Math.ceil(exact);
+}
+
+/** Times beyond the slowest marking are counted in seconds, so each whole second is a mark of its own. */
+function secondsMark(scale: Scale, exact: number, rounding: Rounding): Mark {
+  const whole = Math.max(SLOWEST_MARKED_S, wholeSeconds(exact, rounding));
+  const position = positionOf('shutter', scale, whole);
+  const label = whole === SLOWEST_MARKED_S ? plainLabel('shutter', scale, position) : String(whole);
+  return { label: dressed('shutter', label), exact: whole, position };
 }
 
 /**
  * The marking at a whole position of a scale.
- * @param position whole steps; for time, positions slower than 30 s have no marking of their own.
+ * @param position whole steps; a time slower than 30 s is given as the nearest whole seconds
+ * @returns the mark. Throws RangeError when the position is not whole or its value is no finite number over 0.
  * Example: markAt('aperture', 'third', 15) is f/5.6, exact 4√2.
  * Source: the tables' sources; beyond their ends labels double or halve with the value ("f/90", "1/64000").
  */
 export function markAt(kind: MarkedKind, scale: Scale, position: number): Mark {
-  const exact = exactAt(kind, scale, position);
-  if (kind === 'shutter' && exact > SLOWEST_MARKED_S) return secondsMark(exact, 'nearest');
+  if (!Number.isInteger(position)) throw new RangeError(`position is ${position}, but must be whole`);
+  const exact = inDomain(kind, exactAt(kind, scale, position), SMALLEST, ANY);
+  if (kind === 'shutter' && exact > SLOWEST_MARKED_S) return secondsMark(scale, exact, 'nearest');
   return { label: dressed(kind, plainLabel(kind, scale, position)), exact, position };
 }
 
@@ -112,8 +125,9 @@ export function markAt(kind: MarkedKind, scale: Scale, position: number): Mark {
  * @param exact f-number, seconds or ISO speed, > 0
  * @param rounding nearest (an exact half goes to the smaller aperture, shorter time, higher speed),
  *   `ceil` (never a larger aperture, longer time, lower speed than asked) or `floor` (the other way)
- * Times over 32 s by more than half a step are named by whole seconds.
- * Example: nearestMark('shutter', 'third', 1/128) is 1/125. Source: handbook rule, ties are a modelling choice.
+ * @returns the mark; over 32 s (the mark 30 s) the whole seconds. Throws RangeError when exact is not over 0.
+ * Example: nearestMark('shutter', 'third', 1/128) is 1/125; 45.2 s is "45s".
+ * Source: derivation; the tie is a modelling choice.
  */
 export function nearestMark(
   kind: MarkedKind,
@@ -121,16 +135,13 @@ export function nearestMark(
   exact: number,
   rounding: Rounding = 'nearest',
 ): Mark {
-  const position = positionOf(kind, scale, exact);
+  const position = positionOf(kind, scale, inDomain(kind, exact, SMALLEST, ANY));
+  if (kind === 'shutter' && exact > SLOWEST_MARKED_S) return secondsMark(scale, exact, rounding);
   const whole = Math.round(position);
-  let chosen = Math.floor(position + 0.5);
-  if (Math.abs(position - whole) < ON_POSITION * Math.max(1, Math.abs(position))) chosen = whole;
-  else if (rounding !== 'nearest') chosen = rounding === 'ceil' ? Math.ceil(position) : Math.floor(position);
-  if (kind === 'shutter' && exact > SLOWEST_MARKED_S) {
-    const slowest = positionOf('shutter', scale, SLOWEST_MARKED_S);
-    if (chosen < slowest || rounding !== 'nearest') return secondsMark(exact, rounding);
-  }
-  return markAt(kind, scale, chosen);
+  if (Math.abs(position - whole) < ON_POSITION * Math.max(1, Math.abs(position)))
+    return markAt(kind, scale, whole);
+  if (rounding === 'nearest') return markAt(kind, scale, Math.floor(position + 0.5));
+  return markAt(kind, scale, rounding === 'ceil' ? Math.ceil(position) : Math.floor(position));
 }
 
 /**

@@ -2,8 +2,9 @@ import { cautions } from './en/cautions';
 import { contradictions } from './en/contradictions';
 import { notes } from './en/notes';
 
-export { faults, wanted } from './en/faults';
+export { faults, rules, wanted } from './en/faults';
 export { cautions } from './en/cautions';
+export { costs } from './en/costs';
 export { problems } from './en/problems';
 
 export type NoteCode = keyof typeof notes;

@@ -2,13 +2,13 @@ import { z } from 'zod';
 import { note, type Remark } from '../../contract/answer';
 import { crossedLimits } from '../../contract/crossedLimits';
 import { defineCalculator } from '../../contract/defineCalculator';
-import { exactLimits, limitsIn } from '../../contract/limits';
+import { exactLimits, limitsIn, usualGearFor } from '../../contract/limits';
 import { apertureIn, isoIn, shutterIn } from '../../contract/settingIn';
 import { chosenMark, settingOut } from '../../contract/settingOut';
 import { exactSettings, readingFields } from '../../contract/settings';
-import { equivalentRows, exposurePosition } from '../../math/equivalents';
+import { equivalentRows, exposurePosition, reachablePosition } from '../../math/equivalents';
 import { sceneEv100 } from '../../math/exposure';
-import { positionOf, stepsPerStop } from '../../math/marks';
+import { nearestMark, stepsPerStop } from '../../math/marks';
 
 /** Closer to a step than this is on it: rounding of log2, far below anything a camera could show. */
 const ON_STEP = 1e-6;
@@ -25,7 +25,10 @@ export const exposureEquivalents = defineCalculator({
       iso: isoIn(),
       limits: limitsIn()
         .optional()
-        .meta({ title: 'Limits', description: 'what the gear allows; usual gear where left out' }),
+        .meta({
+          title: 'Limits',
+          description: 'what the gear allows; where left out usual gear, widened to the settings given',
+        }),
       keep: z
         .enum(['iso', 'aperture', 'shutter', 'none'])
         .default('iso')
@@ -89,21 +92,23 @@ export const exposureEquivalents = defineCalculator({
     },
   ],
   compute(input) {
-    const exact = exactSettings({ ...input, ndStops: 0 }, input);
-    const ev100 = sceneEv100(exact.aperture, exact.shutterS, exact.iso);
-    const kept = { aperture: exact.aperture, shutter: exact.shutterS, iso: exact.iso };
-    const keep =
-      input.keep === 'none'
-        ? null
-        : { kind: input.keep, position: Math.round(positionOf(input.keep, input.scale, kept[input.keep])) };
-    const exposure = exposurePosition(ev100, input.scale);
-    const step = Math.round(exposure);
-    const rows = equivalentRows(step, input.scale, exactLimits(input.limits ?? {}, input), keep);
+    const { scale, limits = {} } = input;
+    const { aperture, shutterS, iso } = exactSettings({ ...input, ndStops: 0 }, input);
+    const ev100 = sceneEv100(aperture, shutterS, iso);
+    const marks = {
+      aperture: nearestMark('aperture', scale, aperture),
+      shutter: nearestMark('shutter', scale, shutterS),
+      iso: nearestMark('iso', scale, iso),
+    };
+    const keep = input.keep === 'none' ? null : { kind: input.keep, position: marks[input.keep].position };
+    const exposure = exposurePosition(ev100, scale);
+    const step = reachablePosition(exposure, keep);
+    const rows = equivalentRows(step, scale, exactLimits(limits, input, usualGearFor(marks)), keep);
     const notes: Remark[] = [];
-    if (Object.keys(input.limits ?? {}).length < 6) notes.push(note('usual_gear_limits'));
-    if (Math.abs(exposure - step) > ON_STEP) {
-      notes.push(note('exposure_moved_to_step', { stops: (exposure - step) / stepsPerStop(input.scale) }));
-    }
+    if (Object.values(limits).filter((limit) => limit !== undefined).length < 6)
+      notes.push(note('usual_gear_limits'));
+    if (Math.abs(exposure - step) > ON_STEP)
+      notes.push(note('exposure_moved_to_step', { stops: (exposure - step) / stepsPerStop(scale) }));
     if (rows.length === 0) notes.push(note('no_equivalents'));
     return {
       result: {

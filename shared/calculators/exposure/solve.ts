@@ -104,13 +104,15 @@ export const exposureSolve = defineCalculator({
     // The settings' own EV100 lies below the scene's by the brightness wanted; a filter takes its part first.
     const settingsEv100 = ev100 - given.brightnessStops - given.ndStops;
     exact[unknown === 'shutter' ? 'shutterS' : unknown] = solveSetting(unknown, settingsEv100, exact);
-    const aperture = exactWithMark('aperture', given.scale, exact.aperture);
-    const shutter = exactWithMark('shutter', given.scale, exact.shutterS);
-    const iso = exactWithMark('iso', given.scale, exact.iso);
-    const residual = aperture.residualStops + shutter.residualStops + iso.residualStops;
+    const marked = {
+      aperture: exactWithMark('aperture', given.scale, exact.aperture),
+      shutter: exactWithMark('shutter', given.scale, exact.shutterS),
+      iso: exactWithMark('iso', given.scale, exact.iso),
+    };
+    const residual = SETTINGS.reduce((sum, name) => sum + marked[name].residualStops, 0);
     return {
-      result: { unknown, aperture, shutter, iso, brightnessAtMarkStops: given.brightnessStops + residual },
-      notes: [...notes, ...usualGearNotes({ aperture, shutter, iso })],
+      result: { unknown, ...marked, brightnessAtMarkStops: given.brightnessStops + residual },
+      notes: [...notes, ...usualGearNotes({ [unknown]: marked[unknown] })],
     };
   },
 });

@@ -1,8 +1,8 @@
-import { readable } from '../format';
+import { quoted, readable } from '../format';
 
 export const exposureContradictions = {
   limits_crossed: (p: Record<string, unknown>) =>
-    `${String(p.low)} must not be above ${String(p.high)}; the limits leave nothing between them.`,
+    `${String(p.high)} must not lie below ${String(p.low)}; ${quoted(p.from)} and ${quoted(p.to)} leave nothing between them.`,
   pair_shortens: (p: Record<string, unknown>) =>
     `Film never needs less time than metered; ${readable(Number(p.correctedS))} s was given for ${readable(Number(p.meteredS))} s.`,
   pairs_not_rising: (p: Record<string, unknown>) =>
