@@ -48,6 +48,9 @@ const HEADERS: Record<string, [string, JsonSchema]> = {
   Allow: ['The methods that this address takes', { type: 'string' }],
 };
 
+/** Statuses that a good key can get; these answers tell where it stands. */
+const WITH_LIMITS = [400, 403, 413, 415, 422, 429, 500];
+
 /** Headers that each status may carry beside the request id. */
 const HEADERS_BY_STATUS: Record<number, string[]> = {
   401: ['WWW-Authenticate'],
@@ -74,7 +77,11 @@ function problemResponse(status: number) {
   const codes = PROBLEM_CODES.filter((code) => statusOf(code) === status);
   return {
     description: codes.map((code) => `\`${code}\``).join(', '),
-    headers: headerRefs(['X-Request-Id', ...(HEADERS_BY_STATUS[status] ?? [])]),
+    headers: headerRefs([
+      'X-Request-Id',
+      ...(HEADERS_BY_STATUS[status] ?? []),
+      ...(WITH_LIMITS.includes(status) ? LIMIT_HEADERS : []),
+    ]),
     content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } },
   };
 }

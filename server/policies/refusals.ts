@@ -60,6 +60,10 @@ export function refusalProblem(decision: Extract<Decision, { granted: false }>, 
     }
     case 'account_blocked':
       return new ProblemError(refusal);
+    case 'key_invalid': {
+      const detail = 'The key is well formed, but there is no such key. Make one in the console under Keys.';
+      return new ProblemError(refusal, detail, { headers: bearer('invalid_token') });
+    }
     default:
       return new ProblemError(refusal, undefined, { headers: bearer('invalid_token') });
   }

@@ -40,7 +40,8 @@ async function runWithNeeds(needs: Needs, args: readonly string[], run: Run): Pr
   const registry = new ProcessRegistry(dataFolder, 'test');
   // One after the other: on two cores nothing is gained by doing them side by side.
   const chromium = needs.browser ? await ensureChromium() : null;
-  const clientFolder = await buildClient();
+  // Only a browser looks at the console.
+  const clientFolder = needs.browser ? await buildClient() : null;
   const { close, ...cluster } = await openTestCluster(dataFolder, registry);
   try {
     const serverFolder = dirname(fileURLToPath(import.meta.url));

@@ -1,7 +1,13 @@
 import { writeFileSync } from 'node:fs';
 import { relative } from 'node:path';
 import type { Reporter, SerializedError, TestModule } from 'vitest/node';
-import { TEST_COUNTS, type Counts } from '../../server/scripts/support/testSettings';
+import {
+  TEST_COUNTS,
+  TEST_SETTINGS,
+  type Counts,
+  type TestSettings,
+} from '../../server/scripts/support/testSettings';
+import { unexercised } from './unexercised';
 
 /** Leaves for the runner how many tests passed and failed, by the folder that they are in. */
 export default class CountsReporter implements Reporter {
@@ -12,8 +18,19 @@ export default class CountsReporter implements Reporter {
     for (const module of modules) add(byKind, kindOf(module), countsOf(module));
     if (unhandledErrors.length > 0)
       add(byKind, 'outside tests', { passed: 0, failed: unhandledErrors.length, skipped: 0 });
+    const untried = untriedContract();
+    if (untried.length > 0) {
+      process.stdout.write(`\n${untried.join('\n')}\n`);
+      add(byKind, 'contract', { passed: 0, failed: untried.length, skipped: 0 });
+    }
     writeFileSync(path, JSON.stringify(byKind));
   }
+}
+
+/** What a whole run should have tried of the API's documents and did not. */
+function untriedContract(): string[] {
+  const settings = process.env[TEST_SETTINGS];
+  return settings ? unexercised(JSON.parse(settings) as TestSettings) : [];
 }
 
 /** The one or two folders under tests/ that hold the file. */

@@ -9,7 +9,8 @@ export type TestSettings = {
   prefix: string;
   /** The built server: its workers, and scripts that a test may start as processes of their own. */
   serverFolder: string;
-  clientFolder: string;
+  /** The built console, where a browser test was selected. */
+  clientFolder: string | null;
   chromium: string | null;
   /** For what the workers of one run want to gather; gone when the run ends. */
   runFolder: string;
