@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import { type z } from 'zod';
 import { stopsOfDensity, stopsOfFactor, stopsOfPolarisers } from '../math/density';
 import { number } from './quantities';
 

@@ -1,7 +1,9 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { filtersDensity } from '../../../shared/calculators/filters/density';
 import { sceneEv100 } from '../../../shared/math/exposure';
 import { askCalculator, codesOf, faultsIn, placesOf } from '../../support/askCalculator';
+import { isFiniteThroughout } from '../../support/closeTo';
 
 const settings = { aperture: 'f/4', shutter: '1/60', iso: 400 };
 
@@ -36,6 +38,34 @@ describe('filters/density', () => {
       );
       expect(moved.map(([name]) => name)).toEqual([move]);
     }
+  });
+
+  it('answers with finite numbers for every filter and every setting, and keeps the exposure', () => {
+    const span = (min: number, max: number) => fc.double({ min, max, noNaN: true });
+    const filter = fc.oneof(
+      fc.record({ stops: span(0, 40) }),
+      fc.record({ density: span(0, 12) }),
+      fc.record({ factor: span(0, Math.log(1e12)).map((n) => Math.min(1e12, Math.exp(n))) }),
+      fc.record({ polariserDeg: span(0, 89) }),
+    );
+    const way = fc.oneof(
+      filter,
+      fc
+        .record({ stack: fc.array(filter, { minLength: 1, maxLength: 10 }) })
+        .filter((input) => faultsIn(filtersDensity, input).length === 0),
+    );
+    const camera = fc.record({ aperture: span(0.5, 256), shutter: span(1e-6, 86_400), iso: span(1, 1e7) });
+    const move = fc.constantFrom('shutter', 'iso', 'aperture');
+    fc.assert(
+      fc.property(way, camera, move, fc.constantFrom('full', 'half', 'third'), (given, set, moves, scale) => {
+        const input = { ...given, settings: set, move: moves, scale, readAs: 'exact' };
+        const answer = askCalculator(filtersDensity, input);
+        expect(isFiniteThroughout(answer)).toBe(true);
+        const { aperture, shutter, iso, ndStops } = answer.result.settings ?? ({} as never);
+        const before = sceneEv100(set.aperture, set.shutter, set.iso);
+        expect(sceneEv100(aperture.exact, shutter.exact, iso.exact, ndStops)).toBeCloseTo(before, 8);
+      }),
+    );
   });
 
   it('tells ND 3.0 from ten stops, and only where a density was given', () => {
