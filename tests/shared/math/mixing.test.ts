@@ -130,6 +130,7 @@ describe('light still needed', () => {
   it('is finite however little room there is, and null when there is none', () => {
     expect(stopsStillNeeded(0, -1e-300)).toBeCloseTo(Math.log2(1e-300 * Math.LN2), 9);
     expect(stopsStillNeeded(1e308, -1e308)).toBe(1e308);
+    for (const level of [-3, 0, 12]) expect(stopsStillNeeded(level, level)).toBeNull();
     fc.assert(
       fc.property(anyStops, anyStops, (total, already) => {
         const missing = stopsStillNeeded(total, already);
