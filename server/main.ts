@@ -9,6 +9,9 @@ import { accessLog } from './services/accessLog';
 import { serviceLog } from './services/logging';
 import { countingPool } from './services/metering/countingPool';
 import { GroupCommitMeter } from './services/metering/groupCommitMeter';
+import { recordFinished } from './services/usage/recordFinished';
+import { usagePool } from './services/usage/usagePool';
+import { UsageWriter } from './services/usage/UsageWriter';
 
 export interface ServeOptions {
   readonly config: Config;
@@ -36,14 +39,26 @@ export async function serve({ config, serviceUrl, clientFolder, logFd }: ServeOp
     logger.warn({ reason: error.message }, 'a counting connection ended');
   });
   const meter = new GroupCommitMeter(pool, () => performance.now());
+  const usageConnections = usagePool(serviceUrl, (error) => {
+    logger.warn({ reason: error.message }, 'a usage connection ended');
+  });
+  const usage = new UsageWriter(usageConnections, (error) => {
+    logger.error({ reason: error.message }, 'usage could not be written; these counts are lost');
+  });
+  const now = () => new Date();
+  const log = accessLog(logger);
+  const record = recordFinished(usage, now);
   const calculators = await loadCalculators();
   const app = createApp({
     config,
     calculators,
     version,
     meter,
-    now: () => new Date(),
-    finish: accessLog(logger),
+    now,
+    finish: (call, status, ms) => {
+      log(call, status, ms);
+      record(call, status, ms);
+    },
     onFault: (call, error) => logger.error({ request: call.requestId, err: error }, 'a call failed'),
     isReady: () =>
       pool.query('SELECT 1').then(
@@ -66,6 +81,8 @@ export async function serve({ config, serviceUrl, clientFolder, logFd }: ServeOp
     await closed;
     clearTimeout(cut);
     await meter.close();
+    await usage.close();
+    await usageConnections.end();
     flush();
   };
   return { url: `http://${config.host}:${port}`, stop };

@@ -20,6 +20,8 @@ export interface CallFacts {
   operation?: string;
   keyId?: string;
   accountId?: string;
+  /** The database's clock when it decided, so that counts fall into the month that the quota did. */
+  at?: Date;
   units: number;
   code?: string;
 }

@@ -17,7 +17,7 @@ export const API_HEADERS: Readonly<HeaderList> = [
 ];
 
 /** What becomes of a finished call: the log line, the usage counts. */
-export type Finish = (call: Call, status: number) => void;
+export type Finish = (call: Call, status: number, ms: number) => void;
 
 let queue: (() => void)[] = [];
 
@@ -39,12 +39,14 @@ function atEndOfTurn(write: () => void): void {
 export function send(call: Call, status: number, headers: HeaderList, body: string, finish: Finish): void {
   const { response, requestId } = call;
   atEndOfTurn(() => {
-    if (response.headersSent || response.destroyed) return;
-    const all = ['X-Request-Id', requestId, ...API_HEADERS, ...headers];
-    if (status !== 304 && status !== 204) all.push('Content-Length', String(Buffer.byteLength(body)));
-    response.writeHead(status, all);
-    response.end(call.request.method === 'HEAD' ? undefined : body);
-    finish(call, status);
+    // A caller who is gone gets nothing, but the call was counted and has to be in the books.
+    if (!response.headersSent && !response.destroyed) {
+      const all = ['X-Request-Id', requestId, ...API_HEADERS, ...headers];
+      if (status !== 304 && status !== 204) all.push('Content-Length', String(Buffer.byteLength(body)));
+      response.writeHead(status, all);
+      response.end(call.request.method === 'HEAD' ? undefined : body);
+    }
+    finish(call, status, Math.round((performance.now() - call.startedMs) * 1000) / 1000);
   });
 }
 

@@ -35,7 +35,7 @@ function propertyAt(schema: JsonSchema, path: readonly string[]): JsonSchema {
 }
 
 /** Scalars as query parameters; those of a group under dotted names. */
-function parametersOf(fields: readonly Field[], schema: JsonSchema, path: string[] = []): JsonSchema[] {
+function parametersOf(fields: readonly Field[], schema: JsonSchema, path: string[] = []): object[] {
   return fields.flatMap((field) => {
     const here = [...path, field.name];
     if (field.kind === 'group') return parametersOf(field.fields ?? [], schema, here);

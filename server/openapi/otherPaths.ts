@@ -93,7 +93,95 @@ const usage = {
   },
 };
 
+const remarks = {
+  type: 'array',
+  items: {
+    type: 'object',
+    required: ['code', 'message'],
+    additionalProperties: false,
+    properties: { code: text, message: text },
+  },
+};
+
+const ITEM = {
+  oneOf: [
+    {
+      type: 'object',
+      title: 'Answered',
+      required: ['status', 'result', 'notes', 'cautions'],
+      additionalProperties: false,
+      properties: { status: { const: 200 }, result: {}, notes: remarks, cautions: remarks },
+    },
+    {
+      type: 'object',
+      title: 'Refused',
+      required: ['status', 'problem'],
+      additionalProperties: false,
+      properties: { status: { enum: [404, 422] }, problem: { $ref: '#/components/schemas/Problem' } },
+    },
+  ],
+};
+
+const batch = {
+  method: 'post',
+  path: '/v1/batch',
+  operationId: 'Batch',
+  summary: 'Several calls at once',
+  description:
+    'Up to 1,000 calls of any calculators in one body of at most 2 MiB. Takes the units of all good items at once, or none and answers 429. An item at fault fails alone and costs nothing; the pointers in its problem lead into its own input.',
+  tags: ['account'],
+  requestBody: {
+    required: true,
+    content: {
+      'application/json': {
+        schema: {
+          type: 'object',
+          required: ['calls'],
+          additionalProperties: false,
+          properties: {
+            calls: {
+              type: 'array',
+              minItems: 1,
+              maxItems: 1000,
+              items: {
+                type: 'object',
+                required: ['calculator', 'input'],
+                additionalProperties: false,
+                properties: { calculator: { ...text, description: 'group/name' }, input: {} },
+              },
+            },
+          },
+        },
+        examples: {
+          two: {
+            summary: 'The same dusk in two ways',
+            value: {
+              calls: [
+                { calculator: 'light/convert', input: { ev100: 5 } },
+                { calculator: 'exposure/solve', input: { ev100: 5, aperture: 'f/4', iso: 400 } },
+              ],
+            },
+          },
+        },
+      },
+    },
+  },
+  responses: {
+    200: {
+      description: 'One result for each call, in order',
+      headers: headerRefs(['X-Request-Id', ...LIMIT_HEADERS]),
+      content: json({
+        type: 'object',
+        required: ['results'],
+        additionalProperties: false,
+        properties: { results: { type: 'array', items: ITEM } },
+      }),
+    },
+    ...problems(400, 401, 403, 413, 415, 422, 429, 500, 503),
+  },
+};
+
 /** The paths that belong to no calculator. */
 export function otherPaths(): RouteConfig[] {
-  return [list, schemas, usage] as unknown as RouteConfig[];
+  return [list, schemas, usage, batch] as unknown as RouteConfig[];
 }

@@ -4,7 +4,7 @@ import type { Finish } from '../http/send';
 /** One line a finished call: who asked what, how it ended, how long it took; never a key, a query or a body. */
 export function accessLog(logger: Logger): Finish {
   const isOn = logger.isLevelEnabled('info');
-  return (call, status) => {
+  return (call, status, ms) => {
     if (!isOn) return;
     const { operation, keyId, units, code } = call.facts;
     logger.info({
@@ -15,7 +15,7 @@ export function accessLog(logger: Logger): Finish {
       code,
       key: keyId,
       units,
-      ms: Math.round((performance.now() - call.startedMs) * 1000) / 1000,
+      ms,
     });
   };
 }

@@ -108,8 +108,9 @@ export class Contract {
     const key = `${operation.operationId} ${seen.status}`;
     let validate = this.validators.get(key);
     if (!validate) {
-      const ref = schema.$ref ? { $ref: `document${schema.$ref}` } : schema;
-      validate = this.ajv.compile(ref);
+      // References are into the document, wherever the schema stands.
+      const absolute = JSON.stringify(schema).replaceAll('"$ref":"#', '"$ref":"document#');
+      validate = this.ajv.compile(JSON.parse(absolute) as object);
       this.validators.set(key, validate);
     }
     if (!validate(seen.body))

@@ -1,16 +1,10 @@
 import { createHash } from 'node:crypto';
 import { answerFor, parseInput, type AnyCalculator } from '../../../shared/contract/defineCalculator';
 import { decodeQuery, type QueryPairs } from '../../../shared/contract/queryCodec';
-import { ProblemError } from '../../http/ProblemError';
+import { invalidInput } from './invalidInput';
 import type { Operation, Prepared } from './operation';
 
 const BODY_LIMIT = 256 * 1024;
-
-/** A refusal with every fault of the input. */
-function invalidInput(faults: NonNullable<ProblemError['errors']>): ProblemError {
-  const many = faults.length > 1 ? `${faults.length} faults; the first: ` : '';
-  return new ProblemError('invalid_input', `${many}${faults[0]?.detail ?? ''}`, { errors: faults });
-}
 
 function prepared(calculator: AnyCalculator, body: unknown, now: () => Date): Prepared & { input?: unknown } {
   const needs = [calculator.id];

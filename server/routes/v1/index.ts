@@ -5,6 +5,7 @@ import { callOf, type Call } from '../../http/Call';
 import { ProblemError } from '../../http/ProblemError';
 import { send } from '../../http/send';
 import { problemErrorOf, sendProblem } from '../../http/sendProblem';
+import { batchOperation } from './batch';
 import { calculatorOperations } from './calculate';
 import { corsHeaders, preflightHeaders } from './cors';
 import { listOperations } from './list';
@@ -22,10 +23,11 @@ export interface V1Dependencies extends MeteredDependencies {
 type Table = Map<string, Partial<Record<string, Operation>>>;
 
 /** Every operation of the metered API, found by path and method. */
-export function v1Operations({ calculators, version, now }: V1Dependencies): Operation[] {
+export function v1Operations({ calculators, version, now, publicUrl }: V1Dependencies): Operation[] {
   return [
     ...listOperations(calculators),
     usageOperation,
+    batchOperation({ calculators, publicUrl, now }),
     ...calculators.flatMap((calculator) => calculatorOperations(calculator, { version, now })),
   ];
 }

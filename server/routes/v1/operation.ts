@@ -33,6 +33,6 @@ export type Operation = {
       /** Bytes of body that POST takes. */
       readonly bodyLimit: number;
       /** Reads the body (POST) or the query's pairs (GET). */
-      readonly prepare: (given: unknown, call: Call) => Prepared;
+      readonly prepare: (given: unknown, call: Call) => Prepared | Promise<Prepared>;
     }
 );

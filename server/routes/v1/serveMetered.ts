@@ -31,7 +31,7 @@ async function prepare(operation: MeteredOperation, call: Call): Promise<Prepare
       operation.method === 'POST'
         ? await readJson(call.request, operation.bodyLimit)
         : readQuery(call.search);
-    return operation.prepare(given, call);
+    return await operation.prepare(given, call);
   } catch (error) {
     const problem = problemErrorOf(error);
     if (problem.code === 'internal_error') throw error;
@@ -75,6 +75,7 @@ export async function serveMetered(
   const { standing } = decision;
   call.facts.keyId = standing?.keyId ?? (decision.granted ? undefined : (decision.keyId ?? undefined));
   call.facts.accountId = standing?.accountId;
+  call.facts.at = standing?.at;
   const limits: HeaderList = corsHeaders(call.request);
   if (standing) limits.push(...limitHeaders(standing));
   if (!decision.granted) {

@@ -1,0 +1,56 @@
+import type pg from 'pg';
+import { LOG_LENGTH, type Gathered, type HourCount } from './UsageRecorder';
+
+const ADD_HOURS = `
+INSERT INTO usage_hours AS u (key_id, hour, calculator, status_class, calls, units, total_ms, latency)
+SELECT key_id, hour, calculator, status_class, calls, units, total_ms, string_to_array(latency, ',')::int[]
+FROM unnest($1::uuid[], $2::timestamptz[], $3::text[], $4::int[], $5::int[], $6::bigint[], $7::float8[], $8::text[])
+  s (key_id, hour, calculator, status_class, calls, units, total_ms, latency)
+WHERE EXISTS (SELECT FROM api_keys k WHERE k.id = s.key_id)
+ORDER BY key_id, hour, calculator, status_class
+ON CONFLICT (key_id, hour, calculator, status_class) DO UPDATE SET
+  calls = u.calls + excluded.calls, units = u.units + excluded.units, total_ms = u.total_ms + excluded.total_ms,
+  latency = add_each(u.latency, excluded.latency), updated_at = service_now()`;
+
+const ADD_LOG = `
+INSERT INTO request_log (key_id, last_at, calls_held, calls)
+SELECT s.key_id, s.last_at, s.held, s.calls
+FROM unnest($1::uuid[], $2::timestamptz[], $3::int[], $4::jsonb[]) s (key_id, last_at, held, calls)
+WHERE EXISTS (SELECT FROM api_keys k WHERE k.id = s.key_id)`;
+
+/** Rows of a key that lie wholly behind its newest 10,000 calls. */
+const SHORTEN = `
+DELETE FROM request_log l USING (
+  SELECT id, sum(calls_held) OVER (PARTITION BY key_id ORDER BY id DESC) - calls_held AS newer
+  FROM request_log WHERE key_id = ANY ($1::uuid[])
+) r WHERE l.id = r.id AND r.newer >= ${LOG_LENGTH}`;
+
+/** Lines older than the stated retention. */
+export const FORGET_OLD = `DELETE FROM request_log WHERE last_at < service_now() - interval '30 days'`;
+
+function hourParameters(hours: readonly HourCount[]): unknown[] {
+  return [
+    hours.map(({ keyId }) => keyId),
+    hours.map(({ hourMs }) => new Date(hourMs)),
+    hours.map(({ calculator }) => calculator),
+    hours.map(({ statusClass }) => statusClass),
+    hours.map(({ calls }) => calls),
+    hours.map(({ units }) => units),
+    hours.map(({ totalMs }) => totalMs),
+    hours.map(({ latency }) => latency.join(',')),
+  ];
+}
+
+/** Writes what was gathered: counts are added up, log lines appended, logs kept to their length. */
+export async function writeUsage(pool: pg.Pool, { hours, logs }: Gathered): Promise<void> {
+  if (hours.length > 0) await pool.query(ADD_HOURS, hourParameters(hours));
+  if (logs.size === 0) return;
+  const entries = [...logs].map(([keyId, lines]) => ({ keyId, lines: lines.slice(-LOG_LENGTH) }));
+  await pool.query(ADD_LOG, [
+    entries.map(({ keyId }) => keyId),
+    entries.map(({ lines }) => lines[lines.length - 1]?.at),
+    entries.map(({ lines }) => lines.length),
+    entries.map(({ lines }) => JSON.stringify(lines)),
+  ]);
+  await pool.query(SHORTEN, [entries.map(({ keyId }) => keyId)]);
+}
