@@ -23,19 +23,23 @@ export function bracketRoot(
   let [low, high] = [from, to];
   let [atLow, atHigh] = [curve(from), curve(to)];
   let kept: 'low' | 'high' | null = null;
+  let probe: number | null = null;
   if (atLow === 0) return low;
   for (let step = 1; step < STEPS && Math.abs(high - low) > tolerance; step += 1) {
-    const isHalving = step % 3 === 0;
-    const middle = isHalving ? (low + high) / 2 : (low * atHigh - high * atLow) / (atHigh - atLow);
-    const value = curve(middle);
-    const moved = value > 0 === atHigh > 0 ? high : low;
-    if (value === 0 || (!isHalving && Math.abs(middle - moved) < tolerance / 2)) return middle;
-    if (moved === high) {
-      [high, atHigh] = [middle, value];
+    const chord = (low * atHigh - high * atLow) / (atHigh - atLow);
+    const next: number = probe ?? (step % 3 === 0 ? (low + high) / 2 : chord);
+    const value = curve(next);
+    if (value === 0) return next;
+    const isHigh = value > 0 === atHigh > 0;
+    // A step that hardly moves an end may have met the root: look just beyond it, once, to close the bracket.
+    const isSmall = probe === null && Math.abs(next - (isHigh ? high : low)) < tolerance;
+    probe = isSmall ? next + 0.9 * tolerance * Math.sign(isHigh ? low - next : high - next) : null;
+    if (isHigh) {
+      [high, atHigh] = [next, value];
       if (kept === 'low') atLow /= 2;
       kept = 'low';
     } else {
-      [low, atLow] = [middle, value];
+      [low, atLow] = [next, value];
       if (kept === 'high') atHigh /= 2;
       kept = 'high';
     }

@@ -21,6 +21,7 @@ const SEMIDIAMETER_DEG = 16 / 60;
 
 /** One millisecond. */
 const ROOT_DAYS = 1 / 86_400_000;
+const FLICKER_MS = 5;
 
 /**
  * When the sun's upper limb is in view, seen through standard air.
@@ -74,7 +75,7 @@ function aboveSkyline(day: SolarDay, skyline: Skyline): Span[] {
   const note = (u: number, isClear: boolean): void => {
     if (isClear) openU ??= u;
     else if (openU !== null) {
-      if (u > openU) spans.push({ fromMs: instantOf(day, openU), toMs: instantOf(day, u) });
+      spans.push({ fromMs: instantOf(day, openU), toMs: instantOf(day, u) });
       openU = null;
     }
   };
@@ -93,7 +94,19 @@ function aboveSkyline(day: SolarDay, skyline: Skyline): Span[] {
     }
   }
   note(day.lowAfter.u, false);
-  return spans;
+  return withoutFlicker(spans);
+}
+
+/** Corners are found to a millisecond: gaps and glimpses about as short are rounding, not sun. */
+function withoutFlicker(spans: readonly Span[]): Span[] {
+  const joined: Span[] = [];
+  for (const span of spans) {
+    const before = joined.at(-1);
+    if (before && span.fromMs - before.toMs < FLICKER_MS) {
+      joined[joined.length - 1] = { fromMs: before.fromMs, toMs: span.toMs };
+    } else joined.push(span);
+  }
+  return joined.filter(({ fromMs, toMs }) => toMs - fromMs >= FLICKER_MS);
 }
 
 /** How far the sun's centre stands above where its limb touches the stretch's line. */

@@ -30,6 +30,7 @@ const TOUCH_DAYS = 1e-5;
  */
 export function sunCrossings(place: Place, altitudeDeg: number, fromMs: number, toMs: number): SunCrossing[] {
   const site = siteOf(place);
+  if (!Number.isFinite(toMs - fromMs)) throw new RangeError(`a span of instants, not ${fromMs} to ${toMs}`);
   const found: SunCrossing[] = [];
   let startMs = fromMs;
   while (startMs < toMs) {
