@@ -5,7 +5,7 @@ export const GEL_STRENGTHS = ['eighth', 'quarter', 'half', 'three quarters', 'fu
 export const GEL_SERIES_NAMES = ['deep daylight', 'daylight'] as const;
 
 /** One sheet of warming (orange) gel as it is sold: its shift, the light it lets through, and what that costs. */
-export interface GelStrength {
+interface GelStrength {
   readonly strength: (typeof GEL_STRENGTHS)[number];
   readonly miredShift: number;
   readonly transmittance: number;

@@ -18,7 +18,7 @@ export const SCENE_GROUPS = [
   'indoors',
 ] as const;
 
-export type SceneGroup = (typeof SCENE_GROUPS)[number];
+type SceneGroup = (typeof SCENE_GROUPS)[number];
 
 /** Where the numbers come from; grouping, codes and words are our own. */
 export const SCENE_SOURCE =
