@@ -5,8 +5,12 @@ import type { FieldMeta } from './field';
  * A value or a list of 1 to `max` such values, with the item's own defaults filled in. No union, so that a fault
  * names the item it stands in.
  */
-export function oneOrMany<T extends z.ZodType>(item: T, max: number, meta: FieldMeta = {}) {
-  return z
+export function oneOrMany<T extends z.ZodType>(
+  item: T,
+  max: number,
+  meta: FieldMeta = {},
+): z.ZodCustom<z.output<T> | z.output<T>[], z.input<T> | z.input<T>[]> {
+  const schema = z
     .custom<z.output<T> | z.output<T>[]>()
     .check((payload) => {
       const value: unknown = payload.value;
@@ -20,6 +24,8 @@ export function oneOrMany<T extends z.ZodType>(item: T, max: number, meta: Field
         payload.issues.push({ ...issue, input: value, path: [...issue.path] } as z.core.$ZodRawIssue);
     })
     .meta({ oneOrMany: item, maxItems: max, ...((item.meta() ?? {}) as FieldMeta), ...meta });
+  // What comes in lacks the defaults that go out; a custom schema knows one type only.
+  return schema as unknown as z.ZodCustom<z.output<T> | z.output<T>[], z.input<T> | z.input<T>[]>;
 }
 
 /** The values of a one-or-many field as a list. */
