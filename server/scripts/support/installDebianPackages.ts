@@ -11,25 +11,25 @@ const environment = {
 };
 const aptOptions = ['-q', '-y', '-o', 'DPkg::Lock::Timeout=300', '-o', 'Dpkg::Use-Pty=0'];
 
+function rootEnvironment(): Record<string, string> {
+  const names = ['http_proxy', 'https_proxy', 'no_proxy', 'HTTP_PROXY', 'HTTPS_PROXY', 'NO_PROXY'];
+  const proxies = names.flatMap((name) => (process.env[name] ? [[name, process.env[name]] as const] : []));
+  return { ...environment, ...Object.fromEntries(proxies) };
+}
+
 /** What to put before a command so that it runs as root: nothing, sudo where it asks nothing, or null. */
 export function rootPrefix(): string[] | null {
   if (process.getuid?.() === 0) return [];
   const sudo = spawnSync('sudo', ['-n', 'true'], { stdio: 'ignore' });
-  return sudo.status === 0
-    ? ['sudo', '-n', 'env', ...Object.entries(environment).map((pair) => pair.join('='))]
-    : null;
+  if (sudo.status !== 0) return null;
+  return ['sudo', '-n', 'env', ...Object.entries(rootEnvironment()).map((pair) => pair.join('='))];
 }
 
 export async function runAsRoot(prefix: readonly string[], command: readonly string[]): Promise<void> {
   const [program, ...args] = [...prefix, ...command];
   if (!program) throw new Error('There is no command to run');
   // Interrupting dpkg half-way would leave the machine's package system in need of repair.
-  await runProgram(program, args, { detached: true, env: { ...environment, ...proxySettings() } });
-}
-
-function proxySettings(): NodeJS.ProcessEnv {
-  const names = ['http_proxy', 'https_proxy', 'no_proxy', 'HTTP_PROXY', 'HTTPS_PROXY', 'NO_PROXY'];
-  return Object.fromEntries(names.map((name) => [name, process.env[name]]).filter(([, value]) => value));
+  await runProgram(program, args, { detached: true, env: rootEnvironment() });
 }
 
 /** Installs packages of Debian's if this user may; `otherwise` tells what to do by hand where that can't be done. */
