@@ -8,15 +8,19 @@ import { consoleHeaders } from './middleware/surfaceHeaders';
 import { consoleFiles } from './routes/consoleFiles';
 import { docsRoutes } from './routes/docs';
 import { healthRoutes } from './routes/health';
+import { metricsRoute } from './routes/metrics';
 import { problemPages } from './routes/problemPages';
 import { v1Handler } from './routes/v1';
+import { wellKnown } from './routes/wellKnown';
 import type { Meter } from './services/metering/meter';
+import type { ServiceMetrics } from './services/metrics/serviceMetrics';
 
 export interface AppDependencies {
-  readonly config: Pick<Config, 'publicUrl' | 'trustProxyHops'>;
+  readonly config: Pick<Config, 'publicUrl' | 'trustProxyHops' | 'contactEmail' | 'metricsToken'>;
   readonly calculators: readonly AnyCalculator[];
   readonly version: string;
   readonly meter: Meter;
+  readonly metrics: ServiceMetrics;
   readonly now: () => Date;
   readonly finish: Finish;
   readonly onFault: (call: Call, error: unknown) => void;
@@ -38,6 +42,8 @@ export function createApp(dependencies: AppDependencies): Express {
   app.use(v1Handler({ ...dependencies, publicUrl }));
   app.use(consoleHeaders());
   app.use('/health', healthRoutes(isReady));
+  app.use('/metrics', metricsRoute(dependencies.metrics, config.metricsToken));
+  app.use(wellKnown({ ...dependencies, publicUrl, contact: config.contactEmail }));
   app.get('/openapi.json', (_request, response) => {
     response
       .set({ 'Cache-Control': 'public, max-age=300', 'Access-Control-Allow-Origin': '*' })

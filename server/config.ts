@@ -19,6 +19,7 @@ export type Config = {
   smtpUrl: string | null;
   mailFrom: string;
   adminEmail: string | null;
+  contactEmail: string;
   logLevel: 'fatal' | 'error' | 'warn' | 'info' | 'debug' | 'trace' | 'silent';
   metricsToken: string | null;
 };
@@ -155,6 +156,11 @@ const environment = z.object({
     'none',
     'The account with this address is an admin',
   ),
+  CONTACT_EMAIL: setting(
+    z.email('it must be an e-mail address'),
+    'security@evenfall.example',
+    'Where people report flaws and blocked accounts ask; it stands in security.txt',
+  ),
   LOG_LEVEL: setting(oneOf(logLevels), 'info', 'The least urgent log lines to write'),
   METRICS_TOKEN: optional(
     secret(16),
@@ -223,6 +229,7 @@ function configFrom(values: z.output<typeof environment>): Config {
     smtpUrl: values.SMTP_URL ?? null,
     mailFrom: values.MAIL_FROM,
     adminEmail: values.ADMIN_EMAIL ?? null,
+    contactEmail: values.CONTACT_EMAIL,
     logLevel: values.LOG_LEVEL,
     metricsToken: values.METRICS_TOKEN ?? null,
   };

@@ -9,6 +9,7 @@ import { accessLog } from './services/accessLog';
 import { serviceLog } from './services/logging';
 import { countingPool } from './services/metering/countingPool';
 import { GroupCommitMeter } from './services/metering/groupCommitMeter';
+import { serviceMetrics } from './services/metrics/serviceMetrics';
 import { recordFinished } from './services/usage/recordFinished';
 import { usagePool } from './services/usage/usagePool';
 import { UsageWriter } from './services/usage/UsageWriter';
@@ -46,6 +47,7 @@ export async function serve({ config, serviceUrl, clientFolder, logFd }: ServeOp
     logger.error({ reason: error.message }, 'usage could not be written; these counts are lost');
   });
   const now = () => new Date();
+  const metrics = serviceMetrics(usageConnections, () => performance.now());
   const log = accessLog(logger);
   const record = recordFinished(usage, now);
   const calculators = await loadCalculators();
@@ -54,10 +56,12 @@ export async function serve({ config, serviceUrl, clientFolder, logFd }: ServeOp
     calculators,
     version,
     meter,
+    metrics,
     now,
     finish: (call, status, ms) => {
       log(call, status, ms);
       record(call, status, ms);
+      metrics.finish(call, status, ms);
     },
     onFault: (call, error) => logger.error({ request: call.requestId, err: error }, 'a call failed'),
     isReady: () =>

@@ -69,6 +69,8 @@ export class Contract {
     const template = this.templates.find(({ pattern }) => pattern.test(seen.path));
     const operation = template && this.document.paths[template.path]?.[seen.method.toLowerCase()];
     if (!template || !operation) {
+      // Pages and files beside the API are no part of its contract.
+      if (!seen.path.startsWith(`/${this.name === 'api' ? 'v1' : 'api'}/`)) return;
       const isRefused =
         seen.method === 'OPTIONS' || seen.method === 'HEAD' || [404, 405].includes(seen.status);
       if (!isRefused) throw new Error(`${seen.method} ${seen.path} (${seen.status}) is not in the document`);
