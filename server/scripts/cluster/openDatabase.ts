@@ -13,7 +13,7 @@ export type Database = {
   close(): Promise<void>;
 };
 
-export const DATABASE = 'evenfall';
+const DATABASE = 'evenfall';
 
 /** The database that the settings name, or else one in a cluster of this clone's own, which is started. */
 export async function openDatabase(

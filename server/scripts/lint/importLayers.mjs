@@ -9,7 +9,7 @@ const ANY = 'any package';
  * The first layer whose `of` a file's path starts with (or matches) holds for it. `may`: what it may import;
  * `types`: what it may import for types alone; `packages`: the packages it may import, NODE meaning Node's own.
  */
-export const layers = [
+const layers = [
   { of: /^shared\/math\/(sun|moon|day|sky)\w*\.ts$/, may: ['shared/math/'], packages: ['astronomy-engine'] },
   { of: 'shared/math/', may: ['shared/math/'] },
   { of: 'shared/time/', may: ['shared/time/'], packages: ['luxon', '@photostructure/tz-lookup'] },
@@ -84,17 +84,30 @@ export const layers = [
   { of: 'src/router/', may: client('router', 'text', 'views', 'stores'), packages: ['vue', 'vue-router'] },
   {
     of: 'src/views/',
-    may: client('views', 'text', 'components', 'composables', 'stores', 'router', 'styles', 'assets'),
+    may: client('views', 'text', 'form', 'components', 'composables', 'stores', 'router', 'styles', 'assets'),
     types: ['src/api/'],
     packages: [ANY],
   },
   {
     of: 'src/components/',
-    may: client('components', 'text', 'composables', 'stores', 'router/navigation', 'styles', 'assets'),
+    may: client(
+      'components',
+      'text',
+      'form',
+      'composables',
+      'stores',
+      'router/navigation',
+      'styles',
+      'assets',
+    ),
     types: ['src/api/'],
     packages: [ANY],
   },
-  { of: 'src/composables/', may: client('composables', 'text', 'stores', 'api', 'styles'), packages: [ANY] },
+  {
+    of: 'src/composables/',
+    may: client('composables', 'text', 'form', 'stores', 'api', 'styles'),
+    packages: [ANY],
+  },
   {
     of: 'src/stores/',
     may: client('stores', 'api', 'text', 'styles'),
@@ -103,12 +116,14 @@ export const layers = [
   },
   { of: 'src/api/', may: client('api'), types: ['openapi/'], packages: [ANY] },
   { of: 'src/styles/', may: client('styles'), packages: [ANY] },
+  // The logic of forms and its words: functions without components.
+  { of: 'src/form/', may: client('form', 'text') },
   { of: 'src/text/', may: client('text') },
   { of: 'src/assets/', may: client('assets') },
   { of: 'src/public/', may: [] },
   {
     of: 'src/widget/',
-    may: client('widget', 'text', 'components', 'composables', 'api', 'styles', 'assets'),
+    may: client('widget', 'text', 'form', 'components', 'composables', 'api', 'styles', 'assets'),
     packages: [ANY],
   },
   { of: /^src\/[\w-]+\.d\.ts$/, may: [], packages: [ANY] },
