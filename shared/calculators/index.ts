@@ -23,6 +23,13 @@ export const calculatorList: readonly CalculatorEntry[] = [
   { id: 'light/flicker', title: 'Mains flicker', load: async () => (await import('./light/flicker')).lightFlicker },
   { id: 'filters/density', title: 'Neutral density', load: async () => (await import('./filters/density')).filtersDensity },
   { id: 'filters/gel', title: 'Gel for a light', load: async () => (await import('./filters/gel')).filtersGel },
+  { id: 'flash/exposure', title: 'Flash exposure', load: async () => (await import('./flash/exposure')).flashExposure },
+  { id: 'flash/measured', title: 'Guide number from a test frame', load: async () => (await import('./flash/measured')).flashMeasured },
+  { id: 'flash/falloff', title: 'Falloff of a light', load: async () => (await import('./flash/falloff')).flashFalloff },
+  { id: 'flash/duration', title: 'Flash duration', load: async () => (await import('./flash/duration')).flashDuration },
+  { id: 'flash/motion', title: 'Motion, ghost and shake', load: async () => (await import('./flash/motion')).flashMotion },
+  { id: 'flash/daylight', title: 'Wide aperture in daylight', load: async () => (await import('./flash/daylight')).flashDaylight },
+  { id: 'flash/budget', title: 'Battery and recycling', load: async () => (await import('./flash/budget')).flashBudget },
 ];
 
 /** Loads every calculator, in the list's order. */

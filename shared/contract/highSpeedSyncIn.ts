@@ -1,6 +1,8 @@
 import { assumedCurtainS, isCurtainPossible } from '../math/highSpeedSync';
 import type { FoundContradiction } from './contradictionAt';
 import { number } from './quantities';
+import { numberOfSetting, type SettingIn } from './settingIn';
+import { exactOf, type Reading } from './settings';
 
 /** What a request may say about high-speed sync beside the shutter. */
 export const highSpeedSyncFields = {
@@ -36,13 +38,18 @@ export function exactHighSpeedSync(given: HighSpeedSyncIn, syncSpeedS: number) {
   };
 }
 
-/** The fault of a curtain that is slower than the sync speed, at the given place. */
+/**
+ * The fault of a curtain that is slower than the sync speed, at the given place. The sync speed counts as read, too:
+ * a curtain of 0.004 s goes with a mark of 1/250, though the mark stands for 1/256 s.
+ */
 export function curtainFaults(
   given: HighSpeedSyncIn | undefined,
-  syncSpeedS: number,
+  syncSpeed: SettingIn,
+  reading: Reading,
   path: readonly string[],
 ): FoundContradiction[] {
   const curtainS = given?.curtainS;
+  const syncSpeedS = Math.max(numberOfSetting('shutter', syncSpeed), exactOf('shutter', syncSpeed, reading));
   if (curtainS === undefined || isCurtainPossible(curtainS, syncSpeedS)) return [];
   return [{ code: 'curtain_slower_than_sync', path, params: { curtainS, syncSpeedS } }];
 }

@@ -59,6 +59,22 @@ export function filterFor(conflictStops: number, ownedStops?: readonly number[])
 }
 
 /**
+ * The settings that put the background where it is wanted at the wanted aperture, without a filter:
+ * t = sync speed·2^(−c). Slower than the sync speed where c is below 0, so that nothing stands in the way; faster
+ * above it, where only high-speed sync can follow.
+ *
+ * @param scene the light, the wish and the camera
+ * @returns exact settings
+ * @throws RangeError when a value is outside its domain
+ * @example two stops to spare at a sync speed of 1/256 s: 1/64 s
+ * @source derivation
+ */
+export function settingsAsWanted(scene: DaylightScene): ExactSettings {
+  const { aperture, iso, syncSpeedS } = scene;
+  return { aperture, shutterS: syncSpeedS * 2 ** -syncConflictStops(scene), iso, ndStops: 0 };
+}
+
+/**
  * The settings that put the background where it is wanted, by one of the three ways.
  *
  * smaller aperture: N·2^(c/2). Neutral density: the filter; what it takes too much goes to a longer time, what it
@@ -81,7 +97,7 @@ export function settingsOfWay(
   const { aperture, iso, syncSpeedS } = scene;
   if (way === 'smallerAperture')
     return { aperture: closed(aperture, conflict), shutterS: syncSpeedS, iso, ndStops: 0 };
-  if (way === 'highSpeedSync') return { aperture, shutterS: syncSpeedS * 2 ** -conflict, iso, ndStops: 0 };
+  if (way === 'highSpeedSync') return settingsAsWanted(scene);
   const ndStops = filterFor(conflict, ownedNdStops);
   const over = ndStops - conflict;
   return over >= 0

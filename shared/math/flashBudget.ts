@@ -40,6 +40,24 @@ export function chargesNeeded(frames: number, perCharge: number): number | null 
 }
 
 /**
+ * Frames that are left in the last charge when the planned ones are done: charges·n − frames, from at least one
+ * charge.
+ *
+ * @param frames whole, ≥ 0
+ * @param perCharge n: frames for each charge, whole, ≥ 0
+ * @param charges as {@link chargesNeeded} gives them
+ * @returns whole, 0 or more
+ * @throws RangeError when a value is outside its domain
+ * @example framesLeft(900, 800, 2) // 700
+ * @source derivation
+ */
+export function framesLeft(frames: number, perCharge: number, charges: number | null): number {
+  inDomain('frames', frames, 0, ANY);
+  inDomain('perCharge', perCharge, 0, ANY);
+  return charges === null ? 0 : Math.max(1, charges) * perCharge - frames;
+}
+
+/**
  * Time until the flash is ready again after a pop: t = t_full·p; energy is taken to flow in evenly.
  *
  * @param recycleFullS t_full: after a pop at full power, s, > 0

@@ -84,6 +84,35 @@ export function solveFlash(
   return inDomain(unknown, 2 ** ((brightnessStops - atOne) / STOPS_PER_DOUBLING[unknown]), SMALLEST, ANY);
 }
 
+/** Whether a flash has the power that it is asked for. */
+export interface FlashReach {
+  readonly withinPower: boolean;
+  /** stops that full power lacks; 0 where it reaches */
+  readonly shortByStops: number;
+  /** stops from the power up to full; negative where full is not enough */
+  readonly reserveStops: number;
+}
+
+/** Light that differs by less is the same. */
+const SAME_LIGHT_STOPS = 1e-9;
+
+/**
+ * How a power stands to full power: reserve = −log2(p).
+ *
+ * @param power p: fraction of full power, > 0; above 1 is more than the flash has
+ * @returns reserve and lack, stops
+ * @throws RangeError when the value is outside its domain
+ * @example reachOf(4) // short by 2 stops
+ * @source definition of the stop
+ */
+export function reachOf(power: number): FlashReach {
+  inDomain('power', power, SMALLEST, ANY);
+  // Not -log2, which would give -0 at full power.
+  const reserveStops = 0 - Math.log2(power);
+  const withinPower = reserveStops >= -SAME_LIGHT_STOPS;
+  return { withinPower, shortByStops: withinPower ? 0 : -reserveStops, reserveStops };
+}
+
 /** Ways to make up for a flash that falls short; each alone is enough. */
 export interface FlashRemedies {
   /** move the flash to this share of its distance */

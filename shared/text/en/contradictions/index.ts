@@ -1,5 +1,6 @@
 import { exposureContradictions } from './exposure';
 import { filtersContradictions } from './filters';
+import { flashContradictions } from './flash';
 import { lightContradictions } from './light';
 
 /** Sentences for faults between fields, by code; each says what was given and what is allowed. */
@@ -7,4 +8,5 @@ export const contradictions = {
   ...exposureContradictions,
   ...lightContradictions,
   ...filtersContradictions,
+  ...flashContradictions,
 } as const;

@@ -1,15 +1,34 @@
 import { readable, signedStops } from '../format';
 import { stopsOf } from '../stopsOf';
 
+/** Three digits are enough for a sentence. */
+const digits = (value: number) => readable(Number(value.toPrecision(3)));
+
+/** Whole heads, rounded up but for rounding errors. */
+const heads = (count: number) => `${digits(Math.ceil(count - 1e-9))} equal heads`;
+
 export const flashNotes = {
-  flash_too_weak: (p: { stops: number; distanceM: number; heads: number; aperture: string; iso: string }) =>
-    `Full power is ${stopsOf(p.stops)} short. Each of these alone makes up for it: the flash at ${readable(Number(p.distanceM.toPrecision(3)))} m, ${readable(Number(p.heads.toPrecision(3)))} equal heads, ${p.aperture}, ISO ${p.iso}, or as much less loss by modifier, gel and filter.`,
+  flash_too_weak: (p: {
+    stops: number;
+    distanceM: number;
+    heads: number;
+    aperture: string;
+    iso: string;
+    lessLossStops: number | null;
+  }) =>
+    `Full power is ${stopsOf(p.stops)} short. Each of these alone makes up for it: the flash at ${digits(p.distanceM)} m, ${heads(p.heads)}, ${p.aperture}, ISO ${p.iso}${
+      p.lessLossStops === null ? '' : ', or as much less loss by modifier, gel and filter'
+    }.`,
+  flash_outshone: (p: { stops: number; distanceM: number; heads: number; lessLossStops: number | null }) =>
+    `Whichever way, the flash is at least ${stopsOf(p.stops)} short. Aperture, ISO and filter change flash and sun alike and don’t help. Each of these alone does: the flash at ${digits(p.distanceM)} m, ${heads(p.heads)}${
+      p.lessLossStops === null ? '' : ', as much less loss by modifier and gel'
+    }; or let the background come out brighter, or wait until it is darker.`,
   power_below_usual: (p: { mark: string }) =>
     `Power ${p.mark} lies below what usual flashes go down to (1/128 to 1/256); move the flash away or put something before it.`,
   flash_very_near: () =>
     'This near, the flash is no small source: light falls off more slowly than by the inverse square, and the figure is too bright.',
   guide_number_outside_usual: (p: { guideNumberM: number }) =>
-    `Guide number ${readable(Number(p.guideNumberM.toPrecision(3)))} lies beyond single portable flashes (about 10 to 80 m); use several, or a studio pack.`,
+    `Guide number ${digits(p.guideNumberM)} lies beyond single portable flashes (about 10 to 80 m); use several, or a studio pack.`,
   guide_number_from_energy: () =>
     'The guide number was worked out from energy, efficacy and reflector; rated ones follow other constants and often a light-walled room, up to a stop apart. Measure it with flash/measured.',
   guns_aimed_alike: () =>
@@ -42,7 +61,7 @@ export const flashNotes = {
   ratio_assumed: () =>
     'The other duration follows from an exponential (t0.1 is 3.32 times t0.5). Real pulses with a rise have 2.4 to 3.1; give the measured ratio where there is one.',
   rise_added: (p: { riseUs: number }) =>
-    `Below 1/16 power the tube’s rise counts: ${readable(Number(p.riseUs.toPrecision(3)))} µs were added, fitted to one published flash.`,
+    `Below 1/16 power the tube’s rise counts: ${digits(p.riseUs)} µs were added, fitted to one published flash.`,
   duration_only_measurable: () =>
     'Controlled by voltage, a flash burns longer at less power, by how much can only be measured. The durations are those of full power: the least they can be.',
   pulse_clipped: (p: { stops: number }) =>
