@@ -117,7 +117,9 @@ export function markAt(kind: MarkedKind, scale: Scale, position: number): Mark {
   if (!Number.isInteger(position)) throw new RangeError(`position is ${position}, but must be whole`);
   const exact = inDomain(kind, exactAt(kind, scale, position), SMALLEST, ANY);
   if (kind === 'shutter' && exact > SLOWEST_MARKED_S) return secondsMark(scale, exact, 'nearest');
-  return { label: dressed(kind, plainLabel(kind, scale, position)), exact, position };
+  // Rounding and signs make −0 of the scale's origin, which is the same place.
+  const at = position === 0 ? 0 : position;
+  return { label: dressed(kind, plainLabel(kind, scale, at)), exact, position: at };
 }
 
 /**
@@ -137,10 +139,10 @@ export function nearestMark(
 ): Mark {
   const position = positionOf(kind, scale, inDomain(kind, exact, SMALLEST, ANY));
   if (kind === 'shutter' && exact > SLOWEST_MARKED_S) return secondsMark(scale, exact, rounding);
+  const room = ON_POSITION * Math.max(1, Math.abs(position));
   const whole = Math.round(position);
-  if (Math.abs(position - whole) < ON_POSITION * Math.max(1, Math.abs(position)))
-    return markAt(kind, scale, whole);
-  if (rounding === 'nearest') return markAt(kind, scale, Math.floor(position + 0.5));
+  if (Math.abs(position - whole) < room) return markAt(kind, scale, whole);
+  if (rounding === 'nearest') return markAt(kind, scale, Math.floor(position + 0.5 + room));
   return markAt(kind, scale, rounding === 'ceil' ? Math.ceil(position) : Math.floor(position));
 }
 
@@ -154,7 +156,8 @@ export function exactOfMarking(kind: MarkedKind, scale: Scale, value: number): n
   const position = Math.round(positionOf(kind, scale, value));
   if (!Number.isFinite(position)) return value;
   const marking = numberOfLabel(plainLabel(kind, scale, position));
-  return Math.abs(value - marking) <= SAME_MARK * marking ? exactAt(kind, scale, position) : value;
+  const isMarking = Number.isFinite(marking) && Math.abs(value - marking) <= SAME_MARK * marking;
+  return isMarking ? exactAt(kind, scale, position) : value;
 }
 
 /**

@@ -10,6 +10,9 @@ export interface PowerMark {
 
 /** How a power is written: "1/16", "1/16+1/3", "1/16 + 1/2". A part of a stop is less than a whole one. */
 export const POWER_FORM = '1/(\\d+(?:\\.\\d+)?)(?:\\s*\\+\\s*(?:(1)/([23])|(2)/(3)))?';
+/** Steps this close to a whole number, or to a half, are on it; covers rounding of log2 and pow. */
+const ON_STEP = 1e-9;
+
 const FORM = new RegExp(`^${POWER_FORM}$`);
 
 /**
@@ -37,9 +40,9 @@ export function powerMarkAt(scale: Scale, stepsBelowFull: number): PowerMark {
  */
 export function nearestPowerMark(scale: Scale, exact: number, rounding: Rounding = 'nearest'): PowerMark {
   const steps = -Math.log2(inDomain('power', exact, SMALLEST, ANY)) * stepsPerStop(scale);
-  const near = Math.round(steps);
+  const near = Math.floor(steps + 0.5 + ON_STEP);
   let chosen = near;
-  if (Math.abs(steps - near) > 1e-9 && rounding !== 'nearest')
+  if (Math.abs(steps - near) > ON_STEP && rounding !== 'nearest')
     chosen = rounding === 'floor' ? Math.ceil(steps) : Math.floor(steps);
   return powerMarkAt(scale, Math.max(0, chosen));
 }
