@@ -33,6 +33,7 @@ export type ClusterOptions = {
 export type Cluster = {
   port: number;
   pid: number;
+  folder: string;
   passwords: ClusterRecord['passwords'];
   /** Leaves the cluster, and stops it if no other process uses it. */
   close(): Promise<void>;
@@ -45,9 +46,9 @@ export async function openCluster(options: ClusterOptions): Promise<Cluster> {
   mkdirSync(dataFolder, { recursive: true });
   return withFolderLock(lockPath, async () => {
     registry.update({ cluster: name });
-    const { postmaster, passwords } = await runningCluster(options);
+    const { postmaster, folder, passwords } = await runningCluster(options);
     const close = () => withFolderLock(lockPath, () => leaveCluster(options, postmaster));
-    return { port: postmaster.port, pid: postmaster.pid, passwords, close };
+    return { port: postmaster.port, pid: postmaster.pid, folder, passwords, close };
   });
 }
 
@@ -72,7 +73,7 @@ async function runningCluster(options: ClusterOptions) {
   else if (!known) await reclaim(task);
   const postmaster = (await adopted(folder, record)) ?? (await started(options, record, programs, user));
   if (record.port !== postmaster.port) writeRecord(dataFolder, name, { ...record, port: postmaster.port });
-  return { postmaster, passwords: record.passwords };
+  return { postmaster, folder, passwords: record.passwords };
 }
 
 function majorOfData(folder: string): number | null {

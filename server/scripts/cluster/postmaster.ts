@@ -48,8 +48,11 @@ function worksIn(pid: number | string, folder: string): boolean {
   }
 }
 
-function hasProcesses(folder: string): boolean {
-  return readdirSync('/proc').some((name) => /^\d+$/.test(name) && worksIn(name, folder));
+/** The server's main process and its helpers. */
+export function processesIn(folder: string): number[] {
+  return readdirSync('/proc')
+    .filter((name) => /^\d+$/.test(name) && worksIn(name, folder))
+    .map(Number);
 }
 
 /**
@@ -58,7 +61,7 @@ function hasProcesses(folder: string): boolean {
  * in the folder any more, which is what it stands for.
  */
 export async function clearLeftovers(folder: string): Promise<void> {
-  for (let waitedMs = 0; hasProcesses(folder); waitedMs += POLL_MS) {
+  for (let waitedMs = 0; processesIn(folder).length > 0; waitedMs += POLL_MS) {
     if (waitedMs > 30_000) throw new Error(`Processes of a server that died still work in ${folder}`);
     await wait(POLL_MS);
   }

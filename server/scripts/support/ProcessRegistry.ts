@@ -32,6 +32,10 @@ export class ProcessRegistry {
     renameSync(draft, join(this.#folder, this.#ownName));
   }
 
+  own(): RegisteredProcess {
+    return this.#own;
+  }
+
   leave(): void {
     rmSync(join(this.#folder, this.#ownName), { force: true });
   }
