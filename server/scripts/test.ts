@@ -5,6 +5,7 @@ import { fileURLToPath } from 'node:url';
 import { openTestCluster } from './cluster/testCluster';
 import { buildClient } from './support/buildClient';
 import { ensureChromium } from './support/ensureChromium';
+import { ensureExamplePrograms } from './support/ensureExamplePrograms';
 import { dataFolder, root } from './support/place';
 import { ProcessRegistry } from './support/ProcessRegistry';
 import { say } from './support/say';
@@ -39,6 +40,7 @@ async function runWithNeeds(needs: Needs, args: readonly string[], run: Run): Pr
   if (!needs.service) return runVitest(args, null, run);
   const registry = new ProcessRegistry(dataFolder, 'test');
   // One after the other: on two cores nothing is gained by doing them side by side.
+  if (needs.examples) await ensureExamplePrograms();
   const chromium = needs.browser ? await ensureChromium() : null;
   // Only a browser looks at the console.
   const clientFolder = needs.browser ? await buildClient() : null;

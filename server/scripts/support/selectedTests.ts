@@ -4,8 +4,9 @@ import { join } from 'node:path';
 // Functions of numbers and texts: these folders' tests need nothing but Node.
 const PURE = ['tests/shared/', 'tests/src/'];
 const IN_BROWSER = ['tests/browser/'];
+const EXAMPLES = ['tests/examples/'];
 
-export type Needs = { service: boolean; browser: boolean; isWhole: boolean };
+export type Needs = { service: boolean; browser: boolean; examples: boolean; isWhole: boolean };
 
 export function testFiles(root: string): string[] {
   const folder = join(root, 'tests');
@@ -24,6 +25,7 @@ export function needsOf(files: readonly string[], args: readonly string[]): Need
   return {
     service: selected.some((file) => !startsWithOneOf(file, PURE)),
     browser: selected.some((file) => startsWithOneOf(file, IN_BROWSER)),
+    examples: selected.some((file) => startsWithOneOf(file, EXAMPLES)),
     isWhole: args.length === 0,
   };
 }
