@@ -8,7 +8,10 @@ function numberWithin(field: Field): fc.Arbitrary<number> {
   const low = field.minimum ?? -1e6;
   const high = field.maximum ?? 1e6;
   if (field.isInteger) return fc.integer({ min: low, max: high });
-  const plain = fc.double({ min: low, max: high, minExcluded: field.minimumIsExcluded, noNaN: true });
+  // JSON and queries know no negative zero.
+  const plain = fc
+    .double({ min: low, max: high, minExcluded: field.minimumIsExcluded, noNaN: true })
+    .map((n) => n + 0);
   if (low < 0) return plain;
   const floor = Math.max(low, high * 1e-12, 1e-12);
   const inRatio = fc
