@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import {
   filterFor,
+  settingsAsWanted,
   settingsOfWay,
   syncConflictStops,
   type DaylightWay,
@@ -43,6 +44,25 @@ describe('a wide aperture in daylight', () => {
 
   it('has no way out where there is no conflict', () => {
     expect(() => settingsOfWay('neutralDensity', { ...sunny, backgroundEv100: 9 })).toThrow(/conflict/);
+  });
+});
+
+describe('the settings as wanted', () => {
+  it('keep the aperture and put the background where it is wanted, slower than sync where there is room', () => {
+    // EV 8 at f/2 and ISO 100 is 1/64 s, two stops slower than 1/256 s.
+    const dusk = { ...sunny, backgroundEv100: 8 };
+    within(settingsAsWanted(dusk).shutterS, 1 / 64, 1e-12, 'shutter');
+    fc.assert(
+      fc.property(conflicts, fc.double({ min: -20, max: 20, noNaN: true }), (scene, moved) => {
+        const there = { ...scene, backgroundEv100: scene.backgroundEv100 + moved };
+        const { aperture, shutterS, iso, ndStops } = settingsAsWanted(there);
+        expect([aperture, iso, ndStops]).toEqual([scene.aperture, scene.iso, 0]);
+        expect(there.backgroundEv100 - sceneEv100(aperture, shutterS, iso)).toBeCloseTo(
+          scene.backgroundStops,
+          8,
+        );
+      }),
+    );
   });
 });
 

@@ -1,6 +1,12 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { chargesNeeded, framesPerCharge, paceOf, recycleAtS } from '../../../shared/math/flashBudget';
+import {
+  chargesNeeded,
+  framesLeft,
+  framesPerCharge,
+  paceOf,
+  recycleAtS,
+} from '../../../shared/math/flashBudget';
 
 const pops = fc.integer({ min: 1, max: 100_000 });
 const power = fc.double({ min: 1e-4, max: 1, noNaN: true });
@@ -45,6 +51,20 @@ describe('frames from a charge', () => {
     );
     expect(chargesNeeded(0, 0)).toBe(0);
     expect(chargesNeeded(1, 0)).toBeNull();
+  });
+});
+
+describe('frames left', () => {
+  it('and frames done are what the charges hold', () => {
+    fc.assert(
+      fc.property(fc.integer({ min: 1, max: 1e6 }), pops, (frames, each) => {
+        const charges = chargesNeeded(frames, each) ?? NaN;
+        expect(framesLeft(frames, each, charges) + frames).toBe(charges * each);
+        expect(framesLeft(frames, each, charges)).toBeLessThan(each);
+      }),
+    );
+    expect(framesLeft(0, 800, 0)).toBe(800);
+    expect(framesLeft(3, 0, null)).toBe(0);
   });
 });
 

@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import {
   flashRemedies,
   flashStops,
+  reachOf,
   solveFlash,
   type FlashSetup,
   type FlashUnknown,
@@ -156,5 +157,16 @@ describe('what helps a flash that falls short', () => {
       lessLossStops: 0,
     });
     expect(() => flashRemedies(-1)).toThrow(RangeError);
+  });
+});
+
+describe('reach', () => {
+  it('is full power with nothing short at 1, and counts stops on either side', () => {
+    expect(reachOf(1)).toEqual({ withinPower: true, shortByStops: 0, reserveStops: 0 });
+    expect(reachOf(1 / 8)).toEqual({ withinPower: true, shortByStops: 0, reserveStops: 3 });
+    expect(reachOf(4)).toEqual({ withinPower: false, shortByStops: 2, reserveStops: -2 });
+    // A rounding error over full power is full power.
+    expect(reachOf(1 + 1e-12).withinPower).toBe(true);
+    expect(() => reachOf(0)).toThrow(/power/);
   });
 });

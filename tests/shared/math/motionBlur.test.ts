@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { HAND_TURN_RAD_PER_S, shakeBlurUm, slowestHandheldS } from '../../../shared/math/handheld';
 import {
+  blurOf,
   longestSharpS,
   magnificationAt,
   motionBlurUm,
@@ -127,6 +128,33 @@ describe('shake beside movement', () => {
         },
       ),
     );
+  });
+});
+
+describe('blur told in three ways', () => {
+  it('agrees with itself, and is frozen up to the longest sharp time', () => {
+    fc.assert(
+      fc.property(
+        fc.double({ min: 0.01, max: 1000, noNaN: true }),
+        scene,
+        fc.double({ min: 0.1, max: 20, noNaN: true }),
+        fc.double({ min: 0.1, max: 100, noNaN: true }),
+        (speedMS, { focalLengthMm, distanceM }, pitchUm, toleranceUm) => {
+          const view = { magnification: magnificationAt(focalLengthMm, distanceM), pitchUm, toleranceUm };
+          const movement = { speedMS, directionDeg: 0 };
+          const longest = longestSharpS(movement, view.magnification, toleranceUm) ?? NaN;
+          const blur = blurOf(movement, longest, view);
+          expect(blur.frozen).toBe(true);
+          expect(blurOf(movement, longest * 1.01, view).frozen).toBe(false);
+          expect((blur.blurPx * pitchUm) / blur.blurUm).toBeCloseTo(1, 12);
+          expect((blur.blurMmAtSubject * view.magnification * 1000) / blur.blurUm).toBeCloseTo(1, 12);
+        },
+      ),
+    );
+  });
+
+  it('has no longest time where the movement is too slow for any number', () => {
+    expect(longestSharpS({ speedMS: 5e-324, directionDeg: 0 }, 1, 6)).toBeNull();
   });
 });
 
