@@ -147,11 +147,17 @@ function wayOf(way: DaylightWay, given: DaylightIn, scene: DaylightScene): z.out
   };
 }
 
+type WayOut = z.output<typeof wayOut>;
+
+const closesAperture = (way: WayOut | undefined) =>
+  way?.costs.some(({ code }) => code === 'filter_too_weak') ?? false;
+
 /** The better of the two ways that keep the aperture, as far as their reserves are known. */
-function betterOf(ways: readonly z.output<typeof wayOut>[]) {
+function betterOf(ways: readonly WayOut[]) {
   const [, filter, highSpeed] = ways;
   const known = highSpeed?.reserveStops ?? null;
   if (!filter || filter.reserveStops === null || !highSpeed || known === null) return null;
+  if (closesAperture(filter)) return null;
   return betterForFlash(filter.reserveStops, highSpeed.reserveRange ?? { lowStops: known, highStops: known });
 }
 
@@ -168,12 +174,14 @@ function notesOn(
     );
   const all = result.asWanted ? [result.asWanted] : result.ways;
   const [best] = [...all].sort((a, b) => (b.reserveStops ?? 0) - (a.reserveStops ?? 0));
+  const room = { roomStops: Math.max(0, -result.conflictStops) };
   if (best?.whatHelps)
-    notes.push(note('flash_outshone', { stops: -(best.reserveStops ?? 0), ...best.whatHelps }));
+    notes.push(note('flash_outshone', { stops: -(best.reserveStops ?? 0), ...room, ...best.whatHelps }));
   if (result.asWanted) notes.push(note('aperture_needs_no_way_out'));
   const range = result.ways[2]?.reserveRange;
   if (range) notes.push(note('hss_loss_unmeasured', { extraStops: UNMEASURED_EXTRA_STOPS, ...range }));
-  if (range && result.better === null) notes.push(note('hss_and_filter_overlap'));
+  if (range && result.better === null && !closesAperture(result.ways[1]))
+    notes.push(note('hss_and_filter_overlap'));
   return notes;
 }
 

@@ -97,6 +97,26 @@ describe('flash/daylight', () => {
     expect(wayOf(nearer, 'neutralDensity').reserveStops).toBeCloseTo(0, 9);
   });
 
+  it('names no better way where the filter does not keep the aperture either', () => {
+    const weak = ask({ ...sunny, ndStops: [3] });
+    expect(weak.result.better).toBeNull();
+    expect(codesOf(weak.notes)).toEqual(['hss_loss_unmeasured']);
+  });
+
+  it('tells the room under the sync speed that a wider aperture or a higher ISO could use', () => {
+    // f/8 and ISO 100 at EV 9 is 1/8 s, 4.67 stops slower than 1/203 s.
+    const late = {
+      ...sunny,
+      background: { ev100: 9 },
+      aperture: 'f/8',
+      flash: { guideNumberM: 4, distanceM: 2 },
+    };
+    const note = ask(late).notes.find(({ code }) => code === 'flash_outshone');
+    expect(note?.message).toMatch(/helps by up to 4\.67 stops/);
+    const wider = ask({ ...late, aperture: 'f/2' }).result.asWanted;
+    expect(wider?.reserveStops).toBeCloseTo((ask(late).result.asWanted?.reserveStops ?? NaN) + 4, 9);
+  });
+
   it('takes one of the filters at hand, and moves shutter or aperture by the rest', () => {
     const strong = wayOf({ ...sunny, ndStops: [3, 10, 6] }, 'neutralDensity');
     expect(strong.settings.ndStops).toBe(6);

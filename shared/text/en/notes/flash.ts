@@ -19,8 +19,18 @@ export const flashNotes = {
     `Full power is ${stopsOf(p.stops)} short. Each of these alone makes up for it: the flash at ${digits(p.distanceM)} m, ${heads(p.heads)}, ${p.aperture}, ISO ${p.iso}${
       p.lessLossStops === null ? '' : ', or as much less loss by modifier, gel and filter'
     }.`,
-  flash_outshone: (p: { stops: number; distanceM: number; heads: number; lessLossStops: number | null }) =>
-    `Whichever way, the flash is at least ${stopsOf(p.stops)} short. Aperture, ISO and filter change flash and sun alike and don’t help. Each of these alone does: the flash at ${digits(p.distanceM)} m, ${heads(p.heads)}${
+  flash_outshone: (p: {
+    stops: number;
+    roomStops: number;
+    distanceM: number;
+    heads: number;
+    lessLossStops: number | null;
+  }) =>
+    `Full power is at least ${stopsOf(p.stops)} short. ${
+      p.roomStops > 0.01
+        ? `A wider aperture or a higher ISO helps by up to ${stopsOf(p.roomStops)}, with the shutter brought up to the sync speed; beyond that they change`
+        : 'Aperture, ISO and filter change'
+    } flash and sun alike and don’t help. Each of these alone does: the flash at ${digits(p.distanceM)} m, ${heads(p.heads)}${
       p.lessLossStops === null ? '' : ', as much less loss by modifier and gel'
     }; or let the background come out brighter, or wait until it is darker.`,
   power_below_usual: (p: { mark: string }) =>
