@@ -4,6 +4,7 @@ import { caution, type Answer, type Remark } from './answer';
 import { acceptsGet, describeFields } from './describeFields';
 import { faultsOf, type Fault } from './faults';
 import type { Field } from './field';
+import { guardLengths } from './guardLengths';
 
 /** What a computation may know beside its input. The clock is handed in; nothing reads it elsewhere. */
 export interface Context {
@@ -60,7 +61,7 @@ export function defineCalculator<I extends z.ZodType, O extends z.ZodType>(
   definition: CalculatorDefinition<I, O>,
 ): Calculator<I, O> {
   const [group = '', name = ''] = definition.id.split('/');
-  const fields = describeFields(definition.input);
+  const fields = describeFields(guardLengths(definition.input));
   return { ...definition, group, name, fields, answersGet: acceptsGet(fields) };
 }
 

@@ -27,7 +27,7 @@ export function atMostOne(...fields: readonly string[]) {
 /** Which of the named fields an object holds. */
 export function givenOf(value: object, fields: readonly string[]): string[] {
   const entries = value as Record<string, unknown>;
-  return fields.filter((field) => entries[field] !== undefined);
+  return fields.filter((field) => Object.hasOwn(entries, field) && entries[field] !== undefined);
 }
 
 function isObject(value: unknown): value is object {

@@ -26,7 +26,9 @@ export function pointerOf(path: Path): string {
 function valueAt(input: unknown, path: Path): unknown {
   return path.reduce<unknown>(
     (value, part) =>
-      typeof value === 'object' && value !== null ? (value as Record<PropertyKey, unknown>)[part] : undefined,
+      typeof value === 'object' && value !== null && Object.hasOwn(value, part)
+        ? (value as Record<PropertyKey, unknown>)[part]
+        : undefined,
     input,
   );
 }

@@ -10,6 +10,8 @@ export function oneOrMany<T extends z.ZodType>(
   max: number,
   meta: FieldMeta = {},
 ): z.ZodCustom<z.output<T> | z.output<T>[], z.input<T> | z.input<T>[]> {
+  // The words are the item's own; that it is a setting is true of each value only.
+  const { setting: _, range: __, ...words } = (item.meta() ?? {}) as FieldMeta;
   const schema = z
     .custom<z.output<T> | z.output<T>[]>()
     .check((payload) => {
@@ -23,7 +25,7 @@ export function oneOrMany<T extends z.ZodType>(
       for (const issue of parsed.error.issues)
         payload.issues.push({ ...issue, input: value, path: [...issue.path] } as z.core.$ZodRawIssue);
     })
-    .meta({ oneOrMany: item, maxItems: max, ...((item.meta() ?? {}) as FieldMeta), ...meta });
+    .meta({ ...words, ...meta, oneOrMany: item, maxItems: max });
   // What comes in lacks the defaults that go out; a custom schema knows one type only.
   return schema as unknown as z.ZodCustom<z.output<T> | z.output<T>[], z.input<T> | z.input<T>[]>;
 }
