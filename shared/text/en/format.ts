@@ -17,7 +17,7 @@ export function readable(value: number): string {
 function exactly(value: number): string {
   if (Number.isNaN(value)) return 'not a number';
   if (!Number.isFinite(value)) return value > 0 ? 'infinity' : `${MINUS}infinity`;
-  const text = String(Math.abs(value));
+  const text = String(Math.abs(value)).replace('e+', 'e');
   return value < 0 ? MINUS + text : text;
 }
 
