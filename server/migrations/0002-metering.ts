@@ -8,75 +8,83 @@ import type { Migration } from './migration';
  * Verdicts, a letter a call: g granted, i key not known, r revoked, e expired, b account blocked, s scope
  * missing, o site not listed, l rate limited, q quota exhausted, c key's cap reached.
  *
- * Locks are taken in one order everywhere, account rows before key rows, each by id, so that batches of
- * several processes can't wait for each other in a circle.
+ * Rows that are missing in a new month are made before any lock is taken, and the accounts' rows are locked in
+ * order of their ids, so that batches of several processes can't wait for each other in a circle. A key's row is
+ * only ever changed under its account's lock.
+ *
+ * The planner is told to keep its plans: it learns nothing from the parameters' lengths, and planning anew takes
+ * longer than the work.
  */
 export const metering: Migration = {
   name: '0002-metering',
   sql: `
-CREATE FUNCTION meter_take(p_hashes bytea[], p_keys int[], p_units int[], p_needs text[], p_sites text[])
-RETURNS TABLE (verdicts text, at timestamptz, keys jsonb) LANGUAGE plpgsql AS $$
+CREATE FUNCTION meter_take(p_hashes bytea[], p_keys int[], p_units int[], p_needs text[], p_sites text[],
+  OUT verdicts text, OUT at timestamptz, OUT keys json)
+LANGUAGE plpgsql SET plan_cache_mode = force_generic_plan AS $$
 DECLARE
-  v_now timestamptz := service_now();
-  v_month date := month_of(v_now);
-  k_id uuid[]; k_account uuid[]; k_state text[]; k_cap bigint[]; k_scopes text[]; k_sites text[]; k_kind text[];
-  k_used bigint[]; k_no int[]; k_granted boolean[];
-  a_id uuid[]; a_limit bigint[]; a_rate int[]; a_burst int[];
-  a_used bigint[]; a_tokens double precision[];
-  r record; n int; i int; j int; k int; a int; u int; v text; v_out text := ''; need text;
+  v_month date;
+  -- Whole from the start, since unnest goes by place and not by subscript.
+  k_state text[] := array_fill('i'::text, ARRAY[cardinality(p_hashes)]);
+  k_id uuid[] := array_fill(NULL::uuid, ARRAY[cardinality(p_hashes)]);
+  k_taken bigint[] := array_fill(NULL::bigint, ARRAY[cardinality(p_hashes)]);
+  k_account uuid[]; k_slot int[]; k_cap bigint[]; k_used bigint[]; k_seen json[];
+  k_scopes text[]; k_sites text[];
+  a_id uuid[]; a_is_new boolean[]; a_limit bigint[]; a_rate int[]; a_burst int[]; a_used bigint[]; a_tokens double precision[];
+  r record; i int; k int; a int; n int := 0; u int; v text; need text; has_cap boolean := false;
 BEGIN
-  SELECT array_agg(key.id ORDER BY h.no), array_agg(key.account_id ORDER BY h.no), array_agg(key.kind ORDER BY h.no),
-    array_agg(CASE WHEN key.id IS NULL THEN 'i' WHEN key.revoked_at IS NOT NULL THEN 'r'
-      WHEN key.expires_at <= v_now THEN 'e' WHEN acc.blocked_at IS NOT NULL THEN 'b' ELSE 'g' END ORDER BY h.no),
-    array_agg(key.monthly_cap ORDER BY h.no),
-    array_agg(' ' || array_to_string(key.scopes, ' ') || ' ' ORDER BY h.no),
-    array_agg(' ' || array_to_string(key.allowed_sites, ' ') || ' ' ORDER BY h.no)
-  INTO k_id, k_account, k_kind, k_state, k_cap, k_scopes, k_sites
-  FROM unnest(p_hashes) WITH ORDINALITY h (hash, no)
-  LEFT JOIN api_keys key ON key.hash = h.hash LEFT JOIN accounts acc ON acc.id = key.account_id;
+  at := service_now();
+  v_month := month_of(at);
+  verdicts := '';
 
-  SELECT array_agg(acc.id ORDER BY acc.id), array_agg(coalesce(acc.own_units_per_month, plan.units_per_month) ORDER BY acc.id),
-    array_agg(coalesce(acc.own_rate_per_second, plan.rate_per_second) ORDER BY acc.id),
-    array_agg(CASE WHEN acc.own_rate_per_second IS NULL THEN plan.burst ELSE acc.own_rate_per_second * 4 END ORDER BY acc.id)
-  INTO a_id, a_limit, a_rate, a_burst
-  FROM accounts acc JOIN plans plan ON plan.id = acc.plan_id
-  WHERE acc.id IN (SELECT account FROM unnest(k_account, k_state) s (account, state) WHERE state = 'g');
+  FOR r IN SELECT h.no, key.id, key.account_id, key.kind, key.monthly_cap, key.scopes, key.allowed_sites,
+      CASE WHEN key.revoked_at IS NOT NULL THEN 'r' WHEN key.expires_at <= at THEN 'e'
+        WHEN acc.blocked_at IS NOT NULL THEN 'b' ELSE 'g' END AS state,
+      coalesce(acc.own_units_per_month, plan.units_per_month) AS units,
+      coalesce(acc.own_rate_per_second, plan.rate_per_second) AS rate,
+      coalesce(acc.own_rate_per_second * 4, plan.burst) AS burst,
+      q.account_id IS NULL AS is_new
+    FROM unnest(p_hashes) WITH ORDINALITY h (hash, no)
+    JOIN api_keys key ON key.hash = h.hash JOIN accounts acc ON acc.id = key.account_id JOIN plans plan ON plan.id = acc.plan_id
+    LEFT JOIN quota_periods q ON q.account_id = acc.id AND q.month = v_month
+  LOOP
+    k := r.no; k_state[k] := r.state; k_id[k] := r.id; k_account[k] := r.account_id;
+    IF r.state = 'g' THEN
+      a := array_position(a_id, r.account_id);
+      IF a IS NULL THEN
+        n := n + 1; a := n;
+        a_id[a] := r.account_id; a_is_new[a] := r.is_new; a_limit[a] := r.units; a_rate[a] := r.rate; a_burst[a] := r.burst;
+      END IF;
+      k_slot[k] := a; k_taken[k] := 0; k_used[k] := 0; k_cap[k] := r.monthly_cap;
+      has_cap := has_cap OR r.monthly_cap IS NOT NULL;
+      k_scopes[k] := ' ' || array_to_string(r.scopes, ' ') || ' ';
+      -- Null for a server key, which no site restricts.
+      k_sites[k] := CASE WHEN r.kind = 'page' THEN ' ' || array_to_string(r.allowed_sites, ' ') || ' ' END;
+    END IF;
+  END LOOP;
 
-  n := coalesce(array_length(a_id, 1), 0);
+  IF true = ANY (a_is_new) THEN
+    INSERT INTO quota_periods (account_id, month, tokens, refilled_at)
+      SELECT s.id, v_month, s.burst, at FROM unnest(a_id, a_burst) s (id, burst) ORDER BY s.id ON CONFLICT DO NOTHING;
+  END IF;
   IF n > 0 THEN
-    LOOP
-      i := 0;
-      FOR r IN SELECT q.account_id, q.used, q.tokens, q.refilled_at FROM quota_periods q
-        WHERE q.month = v_month AND q.account_id = ANY (a_id) ORDER BY q.account_id FOR UPDATE LOOP
-        i := i + 1;
-        a := array_position(a_id, r.account_id);
-        a_used[a] := r.used;
-        -- A bucket refills by the time gone since it last did; a clock that went back refills nothing.
-        a_tokens[a] := least(a_burst[a], r.tokens + a_rate[a] * greatest(0, extract(epoch FROM v_now - r.refilled_at)));
-      END LOOP;
-      EXIT WHEN i = n;
-      INSERT INTO quota_periods (account_id, month, tokens, refilled_at)
-        SELECT s.id, v_month, s.burst, v_now FROM unnest(a_id, a_burst) s (id, burst) ORDER BY s.id ON CONFLICT DO NOTHING;
+    FOR r IN SELECT q.account_id, q.used, q.tokens, q.refilled_at FROM quota_periods q
+      WHERE q.month = v_month AND q.account_id = ANY (a_id) ORDER BY q.account_id FOR UPDATE LOOP
+      a := array_position(a_id, r.account_id);
+      a_used[a] := r.used;
+      -- A bucket refills by the time gone since it last did; a clock that went back refills nothing.
+      a_tokens[a] := least(a_burst[a], r.tokens + a_rate[a] * greatest(0, extract(epoch FROM at - r.refilled_at)));
     END LOOP;
-    FOR k IN 1 .. array_length(k_id, 1) LOOP
-      k_no[k] := array_position(a_id, k_account[k]);
-      k_used[k] := 0;
-      k_granted[k] := false;
-    END LOOP;
-    INSERT INTO key_periods (key_id, month)
-      SELECT s.id, v_month FROM unnest(k_id, k_state) s (id, state)
-      WHERE state = 'g' AND NOT EXISTS (SELECT FROM key_periods p WHERE p.key_id = s.id AND p.month = v_month)
-      ORDER BY s.id ON CONFLICT DO NOTHING;
-    FOR r IN SELECT p.key_id, p.used FROM key_periods p
-      WHERE p.month = v_month AND p.key_id = ANY (k_id) ORDER BY p.key_id FOR UPDATE LOOP
+  END IF;
+  IF has_cap THEN
+    FOR r IN SELECT p.key_id, p.used FROM key_periods p WHERE p.month = v_month AND p.key_id = ANY (k_id) LOOP
       k_used[array_position(k_id, r.key_id)] := r.used;
     END LOOP;
   END IF;
 
-  FOR i IN 1 .. array_length(p_keys, 1) LOOP
+  FOR i IN 1 .. cardinality(p_keys) LOOP
     k := p_keys[i]; u := p_units[i]; v := k_state[k];
     IF v = 'g' THEN
-      IF k_kind[k] = 'page' AND (p_sites[i] = '' OR position(' ' || p_sites[i] || ' ' IN k_sites[k]) = 0) THEN v := 'o';
+      IF k_sites[k] IS NOT NULL AND (p_sites[i] = '' OR position(' ' || p_sites[i] || ' ' IN k_sites[k]) = 0) THEN v := 'o';
       ELSIF k_scopes[k] <> ' * ' AND p_needs[i] <> '' THEN
         FOREACH need IN ARRAY string_to_array(p_needs[i], ' ') LOOP
           IF position(' ' || need || ' ' IN k_scopes[k]) = 0
@@ -85,35 +93,39 @@ BEGIN
       END IF;
     END IF;
     IF v = 'g' THEN
-      a := k_no[k];
+      a := k_slot[k];
       IF a_tokens[a] < 1 THEN v := 'l';
       ELSE
         a_tokens[a] := a_tokens[a] - 1;
         IF u > 0 AND a_used[a] + u > a_limit[a] THEN v := 'q';
-        ELSIF u > 0 AND k_used[k] + u > k_cap[k] THEN v := 'c';
+        ELSIF u > 0 AND k_used[k] + k_taken[k] + u > k_cap[k] THEN v := 'c';
         ELSE
           a_used[a] := a_used[a] + u;
-          k_used[k] := k_used[k] + u;
-          k_granted[k] := true;
+          k_taken[k] := k_taken[k] + u;
         END IF;
       END IF;
     END IF;
-    v_out := v_out || v;
+    verdicts := verdicts || v;
   END LOOP;
 
   IF n > 0 THEN
-    UPDATE quota_periods q SET used = s.used, tokens = s.tokens, refilled_at = greatest(q.refilled_at, v_now), updated_at = v_now
+    UPDATE quota_periods q SET used = s.used, tokens = s.tokens, refilled_at = greatest(q.refilled_at, at), updated_at = at
       FROM unnest(a_id, a_used, a_tokens) s (id, used, tokens) WHERE q.account_id = s.id AND q.month = v_month;
-    UPDATE key_periods p SET used = s.used, updated_at = v_now
-      FROM unnest(k_id, k_used, k_granted) s (id, used, granted) WHERE p.key_id = s.id AND p.month = v_month AND s.granted;
+    FOR r IN INSERT INTO key_periods AS p (key_id, month, used)
+      SELECT s.id, v_month, s.taken FROM unnest(k_id, k_taken) s (id, taken) WHERE s.taken IS NOT NULL
+      ON CONFLICT (key_id, month) DO UPDATE SET used = p.used + excluded.used, updated_at = at RETURNING p.key_id, p.used LOOP
+      k_used[array_position(k_id, r.key_id)] := r.used;
+    END LOOP;
   END IF;
 
-  RETURN QUERY SELECT v_out, v_now, (
-    SELECT jsonb_agg(CASE WHEN k_state[s.no] = 'g' THEN jsonb_build_object('id', k_id[s.no], 'account', k_account[s.no],
-      'limit', a_limit[k_no[s.no]], 'used', a_used[k_no[s.no]], 'cap', k_cap[s.no], 'keyUsed', k_used[s.no],
-      'rate', a_rate[k_no[s.no]], 'burst', a_burst[k_no[s.no]], 'tokens', a_tokens[k_no[s.no]], 'scopes', btrim(k_scopes[s.no]))
-      ELSE jsonb_build_object('id', k_id[s.no], 'account', k_account[s.no]) END ORDER BY s.no)
-    FROM generate_series(1, array_length(p_hashes, 1)) s (no));
+  FOR k IN 1 .. cardinality(p_hashes) LOOP
+    a := k_slot[k];
+    k_seen[k] := CASE WHEN a IS NULL THEN json_build_object('id', k_id[k], 'account', k_account[k])
+      ELSE json_build_object('id', k_id[k], 'account', k_account[k], 'limit', a_limit[a], 'used', a_used[a],
+        'cap', k_cap[k], 'keyUsed', k_used[k], 'rate', a_rate[a], 'burst', a_burst[a], 'tokens', a_tokens[a],
+        'scopes', btrim(k_scopes[k])) END;
+  END LOOP;
+  keys := array_to_json(k_seen);
 END $$;
 
 -- Units given back for calls that we failed after they were granted; never below nothing.
