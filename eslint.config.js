@@ -193,6 +193,8 @@ export default tseslint.config(
     ),
   },
   { files: ['tests/support/**'], rules: restrict(honestTests) },
+  // The examples are programs of their own and get an environment.
+  { files: ['tests/examples/**'], rules: restrict(honestTests, noDefaultExport) },
   { files: ['examples/**', 'tests/bench/**'], rules: { 'no-console': 'off' } },
   {
     files: ['**/*.config.{ts,js}'],

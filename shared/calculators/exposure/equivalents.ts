@@ -23,12 +23,10 @@ export const exposureEquivalents = defineCalculator({
       aperture: apertureIn(),
       shutter: shutterIn(),
       iso: isoIn(),
-      limits: limitsIn()
-        .optional()
-        .meta({
-          title: 'Limits',
-          description: 'what the gear allows; where left out usual gear, widened to the settings given',
-        }),
+      limits: limitsIn().optional().meta({
+        title: 'Limits',
+        description: 'what the gear allows; where left out usual gear, widened to the settings given',
+      }),
       keep: z
         .enum(['iso', 'aperture', 'shutter', 'none'])
         .default('iso')
