@@ -1,3 +1,4 @@
+import { setImmediate } from 'node:timers/promises';
 import { parseArgs } from 'node:util';
 import type { Config } from '../config';
 import { serve } from '../main';
@@ -31,7 +32,8 @@ export async function main(args: readonly string[]): Promise<void> {
       await database.close();
     }
   } catch (error) {
-    // What Ctrl-C interrupts, fails; that is what was asked for.
+    // What Ctrl-C interrupts, fails; that is what was asked for. A signal is told a turn after it has arrived.
+    await setImmediate();
     if (!stop.aborted) throw error;
   } finally {
     registry.leave();

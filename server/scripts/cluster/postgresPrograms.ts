@@ -24,6 +24,8 @@ export function installedPostgres(): PostgresPrograms[] {
 }
 
 function majorOf(folder: string): number {
+  const [, debianMajor] = /^\/usr\/lib\/postgresql\/(\d+)\/bin$/.exec(folder) ?? [];
+  if (debianMajor) return Number(debianMajor);
   const text = execFileSync(join(folder, 'postgres'), ['--version'], { encoding: 'utf8' });
   return Number(/(\d+)(\.\d+|\w+)/.exec(text)?.[1] ?? 0);
 }
