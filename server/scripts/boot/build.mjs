@@ -37,8 +37,18 @@ function buildForNode(input, outDir) {
   });
 }
 
+function run(kind, paths) {
+  if (kind === 'server') return buildForNode(serverEntries(), paths[0]);
+  if (kind === 'client') return build({ logLevel: 'warn', build: { outDir: paths[0], emptyOutDir: true } });
+  if (kind === 'entry') return buildForNode(entriesOf([paths[0]]), paths[1]);
+  throw new Error(`Nothing is called ${kind}`);
+}
+
 const [kind, ...paths] = process.argv.slice(2);
-if (kind === 'server') await buildForNode(serverEntries(), paths[0]);
-else if (kind === 'client') await build({ logLevel: 'warn', build: { outDir: paths[0], emptyOutDir: true } });
-else if (kind === 'entry') await buildForNode(entriesOf([paths[0]]), paths[1]);
-else throw new Error(`Nothing is called ${kind}`);
+try {
+  await run(kind, paths);
+} catch (error) {
+  // The bundler's message shows the place; its stack is the bundler's own.
+  process.stderr.write(`${error.message}\n`);
+  process.exit(1);
+}
