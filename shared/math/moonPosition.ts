@@ -1,12 +1,16 @@
 import {
-  AngleFromSun,
+  AngleBetween,
   Body,
-  Equator,
   GeoMoon,
-  Horizon,
+  GeoVector,
+  HorizonFromVector,
   KM_PER_AU,
   MakeTime,
   Observer,
+  ObserverVector,
+  RotateVector,
+  Rotation_EQJ_HOR,
+  Vector,
 } from 'astronomy-engine';
 import { RADIANS_PER_DEGREE } from './angles';
 import { moonLight } from './moonLight';
@@ -43,11 +47,14 @@ export function moonPosition(place: Place, atMs: number): MoonPosition {
   if (!Number.isFinite(atMs)) throw new RangeError(`an instant in milliseconds, not ${atMs}`);
   const time = MakeTime(new Date(atMs));
   const observer = new Observer(place.latitude, place.longitude, 0);
-  const { ra, dec } = Equator(Body.Moon, time, observer, true, true);
-  const { altitude, azimuth } = Horizon(time, observer, ra, dec);
-  const distanceKm = GeoMoon(time).Length() * KM_PER_AU;
-  const parallaxDeg = Math.asin(EARTH_RADIUS_KM / distanceKm) / RADIANS_PER_DEGREE;
-  const phaseAngleDeg = 180 - AngleFromSun(Body.Moon, time);
+  // The moon's series cost more than everything else, so they are summed once.
+  const moon = GeoMoon(time);
+  const stand = ObserverVector(time, observer, false);
+  const seen = new Vector(moon.x - stand.x, moon.y - stand.y, moon.z - stand.z, time);
+  const horizontal = HorizonFromVector(RotateVector(Rotation_EQJ_HOR(time, observer), seen), '');
+  const [altitude, azimuth] = [horizontal.lat, horizontal.lon];
+  const parallaxDeg = Math.asin(EARTH_RADIUS_KM / (moon.Length() * KM_PER_AU)) / RADIANS_PER_DEGREE;
+  const phaseAngleDeg = 180 - AngleBetween(moon, GeoVector(Body.Sun, time, true));
   return {
     altitudeDeg: altitude,
     azimuthDeg: azimuth,
