@@ -38,7 +38,7 @@ export interface SolarDay {
  * @param nearMs instant, milliseconds since 1970 (UTC); for a civil date its middle
  * @returns the day, instants in days since noon UTC of the day that holds its solar noon
  * @throws RangeError when a coordinate is out of range or the instant is not finite
- * @example instantOf(day, solarDay({ latitude: 0, longitude: 0 }, Date.UTC(2026, 1, 11, 12)).noonU) // 12:14:13 UTC
+ * @example instantOf(day, solarDay({ latitude: 0, longitude: 0 }, Date.UTC(2026, 1, 11, 12)).noonU) // 12:14:10 UTC
  * @source definitions of upper and lower transit; halves by extremes are a derivation
  */
 export function solarDay(place: Place, nearMs: number): SolarDay {

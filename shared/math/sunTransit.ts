@@ -34,7 +34,7 @@ function stepTo(fit: SunFit, site: SunSite, u: number, targetRad: number): numbe
  * @param nearMs instant, milliseconds since 1970 (UTC), for a civil date its middle
  * @returns milliseconds since 1970 (UTC), not rounded
  * @throws RangeError when the instant is not finite
- * @example solarNoonNear(siteOf({ latitude: 0, longitude: 0 }), Date.UTC(2026, 1, 11, 12)) // 12:14:13 UTC
+ * @example solarNoonNear(siteOf({ latitude: 0, longitude: 0 }), Date.UTC(2026, 1, 11, 12)) // 12:14:10 UTC
  * @source as `transitInFit`
  */
 export function solarNoonNear(site: SunSite, nearMs: number): number {

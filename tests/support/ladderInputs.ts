@@ -19,9 +19,9 @@ export interface Evening {
 
 const HOUR_MS = 3_600_000;
 
-/** The evening's scene, EV100, at an instant within three hours of sunset. */
+/** The evening's scene, EV100, at an instant from an hour before sunset until five hours after. */
 export function truthOf({ place, sunsetMs, offsetStops, floorEv100 }: Evening): (atMs: number) => number {
-  const light = naturalLight(place, sunsetMs - 3 * HOUR_MS, sunsetMs + 14 * HOUR_MS);
+  const light = naturalLight(place, sunsetMs - HOUR_MS, sunsetMs + 5 * HOUR_MS);
   return (atMs) => combinedEv100(light.ev100At(atMs), offsetStops, floorEv100);
 }
 

@@ -72,6 +72,7 @@ export type LadderNote =
       readonly lowEv100: number | null;
       readonly highEv100: number | null;
     }
+  | { readonly code: 'frame_below_lamps'; readonly sceneEv100: number; readonly lampFloorEv100: number }
   | { readonly code: 'lamps_came_on'; readonly atMs: number }
   | { readonly code: 'frame_before_sunset' }
   | { readonly code: 'check_clock'; readonly offsetStops: number }

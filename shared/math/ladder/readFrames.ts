@@ -57,7 +57,9 @@ export function readFrames(
   if (input.frames.length === 1 && input.lampFloorEv100 === undefined) notes.push({ code: 'lamps_unknown' });
   if (cameOnMs !== null) notes.push({ code: 'lamps_came_on', atMs: cameOnMs });
   if (isBeforeSunset.includes(true)) notes.push({ code: 'frame_before_sunset' });
-  if (Math.abs(fit.best.offsetStops) > BELIEVABLE_OFFSET_STOPS) {
+  const dimmest = dimmestUnder(input.lampFloorEv100, readings);
+  if (dimmest !== null) notes.push(dimmest);
+  else if (Math.abs(fit.best.offsetStops) > BELIEVABLE_OFFSET_STOPS) {
     notes.push({ code: 'check_clock', offsetStops: fit.best.offsetStops });
   }
   return { fit, lamps, spreadStops: spreadOf(fit, isBeforeSunset), notes };
@@ -66,6 +68,15 @@ export function readFrames(
 /** EV100 of the scene by a test frame: the settings' plus how much brighter than a middle tone it came out. */
 export function evOfFrame(frame: LadderFrame): number {
   return sceneEv100(frame.aperture, frame.shutterS, frame.iso, frame.ndStops) + frame.offsetStops;
+}
+
+/** A frame that is no brighter than the lamps that are said to light it leaves nothing for the sky. */
+function dimmestUnder(floorEv100: number | undefined, readings: readonly FrameReading[]): LadderNote | null {
+  if (floorEv100 === undefined) return null;
+  const lit = readings.filter(({ areLampsOn: areOn }) => areOn).map((reading) => reading.sceneEv100);
+  const dimmest = Math.min(...lit);
+  if (dimmest > floorEv100 || lit.length === 0) return null;
+  return { code: 'frame_below_lamps', sceneEv100: dimmest, lampFloorEv100: floorEv100 };
 }
 
 function spreadOf(fit: SceneFit, isBeforeSunset: readonly boolean[]): number {

@@ -46,6 +46,19 @@ describe('what would mislead is said', () => {
     expect(rung).toMatchObject({ earlyS: 0, lateS: 0 });
   });
 
+  it('a frame is darker than the lamps that are told to light it, which leaves nothing for the sky', () => {
+    const frame = frameOf(clear, at(-8));
+    const floor = 4;
+    const ladder = duskLadder({ ...inputOf(clear), frames: [frame], lampFloorEv100: floor });
+    const note = ladder.notes.find(({ code }) => code === 'frame_below_lamps');
+    if (note?.code !== 'frame_below_lamps') throw new Error('not said');
+    expect(note.lampFloorEv100).toBe(floor);
+    expect(note.sceneEv100).toBeLessThan(floor);
+    expect(codes(ladder)).not.toContain('check_clock');
+    within(ladder.rungs.at(-1)?.sceneEv100 ?? NaN, floor, 0.02, 'scene');
+    expect(codes(duskLadder({ ...inputOf(clear), lampFloorEv100: -9 }))).not.toContain('frame_below_lamps');
+  });
+
   it('a frame before sunset is worth two stops of spread, unless there are better ones', () => {
     const early = frameOf(clear, at(2));
     const alone = duskLadder({ ...inputOf(clear), frames: [early] });
