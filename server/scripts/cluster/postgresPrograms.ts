@@ -11,7 +11,7 @@ const debianFolder = '/usr/lib/postgresql';
 const noMainCluster = '/etc/postgresql-common/createcluster.d/evenfall.conf';
 
 /** The installed PostgreSQL servers, newest first: Debian's, which are not on the PATH, and whatever is. */
-export function installedPostgres(): PostgresPrograms[] {
+function installedPostgres(): PostgresPrograms[] {
   const debian = existsSync(debianFolder) ? readdirSync(debianFolder) : [];
   const folders = [
     ...debian.map((name) => join(debianFolder, name, 'bin')),
