@@ -39,7 +39,7 @@ function speed(): BenchLine {
     other.push(timed(() => (sink += suncalcDays())));
   }
   if (!Number.isFinite(sink)) throw new Error('a day without a noon');
-  return { name: 'twilight-vs-suncalc', value: median(other) / median(own), unit: 'x', goal: '>= 2' };
+  return { name: 'twilight-vs-suncalc', value: median(other) / median(own), unit: '×', goal: '≥ 2' };
 }
 
 /** Solar noon and six altitudes, morning and evening, of which eight come with their azimuth: thirteen events. */
@@ -80,7 +80,7 @@ function accuracy(): BenchLine[] {
     }
   }
   return [
-    { name: 'twilight-worst-below-60', value: worstS, unit: 's', goal: '<= 0.1' },
+    { name: 'twilight-worst-below-60', value: worstS, unit: 's', goal: '≤ 0.1' },
     { name: 'twilight-missed-or-invented', value: different, unit: 'events', goal: '0' },
   ];
 }
