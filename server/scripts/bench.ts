@@ -5,6 +5,7 @@ import { buildClient, buildEntry } from './support/buildClient';
 import { commandConfig } from './support/loadConfig';
 import { dataFolder } from './support/place';
 import { ProcessRegistry } from './support/ProcessRegistry';
+import { stopSignal } from './support/stopSignal';
 
 /** What the benchmarks are given: an empty database of their own, which keeps what it commits as a service's does. */
 export type BenchOptions = {
@@ -24,6 +25,9 @@ export async function main(args: readonly string[]): Promise<void> {
   const registry = new ProcessRegistry(dataFolder, 'bench');
   const config = { ...commandConfig(), databaseUrl: null, databaseOwnerUrl: null };
   const database = await openDatabase(config, { dataFolder, registry, name: 'bench-cluster' });
+  stopSignal().addEventListener('abort', () => {
+    void database.close().finally(() => process.exit(130));
+  });
   try {
     const { runBench } = (await import(pathToFileURL(join(entry, 'bench.js')).href)) as Bench;
     const { ownerUrl, serviceUrl } = database;

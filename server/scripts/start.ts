@@ -77,13 +77,13 @@ async function signInLines(config: Config, { ownerUrl }: Database): Promise<stri
   return report.lines;
 }
 
-function greeting({ publicUrl }: Config, { clusterPort }: Database, signIn: readonly string[]): string[] {
+function greeting({ publicUrl, mode, smtpUrl }: Config, { clusterPort }: Database, signIn: readonly string[]): string[] {
   return [
     '',
     'Evenfall is ready.',
     `  Console     ${publicUrl}/`,
     `  API docs    ${publicUrl}/docs`,
-    `  Local mail  ${publicUrl}/mail`,
+    ...(mode === 'production' || smtpUrl ? [] : [`  Local mail  ${publicUrl}/mail`]),
     clusterPort
       ? `  Database    its own, on 127.0.0.1:${clusterPort}`
       : '  Database    the one in DATABASE_URL',
