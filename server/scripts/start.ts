@@ -77,7 +77,11 @@ async function signInLines(config: Config, { ownerUrl }: Database): Promise<stri
   return report.lines;
 }
 
-function greeting({ publicUrl, mode, smtpUrl }: Config, { clusterPort }: Database, signIn: readonly string[]): string[] {
+function greeting(
+  { publicUrl, mode, smtpUrl }: Config,
+  { clusterPort }: Database,
+  signIn: readonly string[],
+): string[] {
   return [
     '',
     'Evenfall is ready.',

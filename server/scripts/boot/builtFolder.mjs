@@ -1,8 +1,10 @@
 import { existsSync, mkdirSync, readdirSync, renameSync, rmSync, statSync, utimesSync } from 'node:fs';
 import { join } from 'node:path';
 
-// Enough for a few branches, and for a running service that still loads parts of an older build.
+// Enough for a few branches. What was taken into use within the hour stays as well: a run of the tests, or a service,
+// may still load parts of it while somebody who is editing makes build after build.
 const KEPT = 5;
+const IN_USE_MS = 3_600_000;
 
 /**
  * The folder `parent/name`, made by `build(folder)` unless it is there already. It is built under another name and
@@ -40,5 +42,7 @@ function removeOldest(parent) {
     .filter((name) => !name.endsWith('.draft'))
     .map((name) => ({ name, usedMs: statSync(join(parent, name)).mtimeMs }))
     .sort((a, b) => b.usedMs - a.usedMs);
-  for (const { name } of built.slice(KEPT)) rmSync(join(parent, name), { recursive: true, force: true });
+  const isOld = ({ usedMs }) => Date.now() - usedMs > IN_USE_MS;
+  for (const { name } of built.slice(KEPT).filter(isOld))
+    rmSync(join(parent, name), { recursive: true, force: true });
 }

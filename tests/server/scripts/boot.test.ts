@@ -81,7 +81,7 @@ describe('builtFolder', () => {
     expect(readdirSync(parent())).toEqual([]);
   });
 
-  it('keeps the five that were used last', async () => {
+  it('keeps the five that were used last, and all that were used within the hour', async () => {
     for (const [age, name] of ['a', 'b', 'c', 'd', 'e'].entries()) {
       const folder = await builtFolder(parent(), name, build);
       utimesSync(folder, 1_000 + age, 1_000 + age);
@@ -89,6 +89,8 @@ describe('builtFolder', () => {
     await builtFolder(parent(), 'a', build);
     await builtFolder(parent(), 'f', build);
     expect(readdirSync(parent()).sort()).toEqual(['a', 'c', 'd', 'e', 'f']);
+    for (const name of ['g', 'h', 'i', 'j']) await builtFolder(parent(), name, build);
+    expect(readdirSync(parent()).sort()).toEqual(['a', 'f', 'g', 'h', 'i', 'j']);
   });
 });
 
