@@ -32,7 +32,7 @@ export function bracketRoot(
     if (value === 0) return next;
     const isHigh = value > 0 === atHigh > 0;
     // A step that hardly moves an end may have met the root: look just beyond it, once, to close the bracket.
-    const isSmall = probe === null && Math.abs(next - (isHigh ? high : low)) < tolerance;
+    const isSmall: boolean = probe === null && Math.abs(next - (isHigh ? high : low)) < tolerance;
     probe = isSmall ? next + 0.9 * tolerance * Math.sign(isHigh ? low - next : high - next) : null;
     if (isHigh) {
       [high, atHigh] = [next, value];

@@ -32,7 +32,7 @@ describe('a dusk ladder', () => {
         const truth = truthOf(evening);
         for (const rung of rungs) within(rung.sceneEv100, truth(rung.atMs), 0.15, 'scene');
       }),
-      { numRuns: 100 },
+      { numRuns: 50 },
     );
   });
 
@@ -47,7 +47,7 @@ describe('a dusk ladder', () => {
         fc.pre(floor === undefined || truth(frame.atMs) - floor > 0.01);
         for (const rung of rungs) within(rung.sceneEv100, truth(rung.atMs), 0.15, 'scene');
       }),
-      { numRuns: 100 },
+      { numRuns: 50 },
     );
   });
 
@@ -63,7 +63,7 @@ describe('a dusk ladder', () => {
           if (index > 0) expect(rung.atMs).toBe(rungs[index - 1]?.untilMs);
         });
       }),
-      { numRuns: 100 },
+      { numRuns: 50 },
     );
   });
 
@@ -91,7 +91,7 @@ describe('a dusk ladder', () => {
         }
         expect(wrong).toEqual([]);
       }),
-      { numRuns: 100 },
+      { numRuns: 50 },
     );
   });
 
@@ -115,7 +115,7 @@ describe('a dusk ladder', () => {
         if (somePlan.order.includes('aperture'))
           expect(last.aperture / Math.sqrt(step)).toBeLessThan(somePlan.apertureMin);
       }),
-      { numRuns: 100 },
+      { numRuns: 50 },
     );
   });
 
@@ -135,7 +135,7 @@ describe('a dusk ladder', () => {
           expect(rung.aperture).toBeLessThanOrEqual(before.aperture);
         });
       }),
-      { numRuns: 100 },
+      { numRuns: 50 },
     );
   });
 
@@ -161,7 +161,7 @@ describe('a dusk ladder', () => {
           ]);
         });
       }),
-      { numRuns: 100 },
+      { numRuns: 50 },
     );
   });
 
@@ -201,7 +201,7 @@ describe('a dusk ladder', () => {
           within(same?.atMs ?? NaN, expected.atMs, 1000, 'instant');
         }
       }),
-      { numRuns: 100 },
+      { numRuns: 50 },
     );
   });
 
@@ -254,7 +254,7 @@ describe('an absurd ladder', () => {
         }
         expect(Number.isFinite(model.skyOffsetStops)).toBe(true);
       }),
-      { numRuns: 100 },
+      { numRuns: 50 },
     );
   });
 
