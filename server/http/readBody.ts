@@ -12,7 +12,17 @@ function tooLarge(limit: number): ProblemError {
   return new ProblemError('too_large', `The body may have up to ${mebibytes(limit)} here.`);
 }
 
-function collect(request: IncomingMessage, limit: number): Promise<Buffer> {
+function parse(body: Buffer): unknown {
+  if (!isUtf8(body)) throw new ProblemError('malformed_json', 'The body is not UTF-8.');
+  try {
+    return JSON.parse(body.toString('utf8'));
+  } catch {
+    const given = body.length === 0 ? 'The body is empty; send a JSON object.' : undefined;
+    throw new ProblemError('malformed_json', given);
+  }
+}
+
+function collect(request: IncomingMessage, limit: number): Promise<unknown> {
   return new Promise((resolve, reject) => {
     const chunks: Buffer[] = [];
     let size = 0;
@@ -25,20 +35,19 @@ function collect(request: IncomingMessage, limit: number): Promise<Buffer> {
         reject(tooLarge(limit));
       }
     });
-    request.on('end', () => resolve(chunks.length === 1 ? (chunks[0] as Buffer) : Buffer.concat(chunks)));
+    request.on('end', () => {
+      try {
+        resolve(parse(chunks.length === 1 ? (chunks[0] as Buffer) : Buffer.concat(chunks)));
+      } catch (error) {
+        reject(error as Error);
+      }
+    });
     request.on('error', reject);
-    request.on('close', () => reject(new ProblemError('malformed_request', 'The body ended too early.')));
+    request.on('close', () => {
+      // Every request closes; one that is complete has been told above.
+      if (!request.complete) reject(new ProblemError('malformed_request', 'The body ended too early.'));
+    });
   });
-}
-
-function parse(body: Buffer): unknown {
-  if (!isUtf8(body)) throw new ProblemError('malformed_json', 'The body is not UTF-8.');
-  try {
-    return JSON.parse(body.toString('utf8'));
-  } catch {
-    const given = body.length === 0 ? 'The body is empty; send a JSON object.' : undefined;
-    throw new ProblemError('malformed_json', given);
-  }
 }
 
 /**
@@ -67,5 +76,5 @@ export async function readJson(request: IncomingMessage, limit: number): Promise
     request.resume();
     throw tooLarge(limit);
   }
-  return parse(await collect(request, limit));
+  return collect(request, limit);
 }

@@ -19,35 +19,40 @@ export const API_HEADERS: Readonly<HeaderList> = [
 /** What becomes of a finished call: the log line, the usage counts. */
 export type Finish = (call: Call, status: number, ms: number) => void;
 
-let queue: (() => void)[] = [];
+interface Outgoing {
+  readonly call: Call;
+  readonly status: number;
+  readonly headers: HeaderList;
+  readonly body: string;
+  readonly finish: Finish;
+}
+
+let queue: Outgoing[] = [];
+
+function write({ call, status, headers, body, finish }: Outgoing): void {
+  const { response, requestId } = call;
+  // A caller who is gone gets nothing, but the call was counted and has to be in the books.
+  if (!response.headersSent && !response.destroyed) {
+    const all = ['X-Request-Id', requestId, ...API_HEADERS, ...headers];
+    if (status !== 304 && status !== 204) all.push('Content-Length', String(Buffer.byteLength(body)));
+    response.writeHead(status, all);
+    response.end(call.request.method === 'HEAD' ? undefined : body);
+  }
+  finish(call, status, Math.round((performance.now() - call.startedMs) * 1000) / 1000);
+}
 
 function flush(): void {
   const ready = queue;
   queue = [];
-  for (const write of ready) write();
+  for (const outgoing of ready) write(outgoing);
 }
 
 /**
- * Answers of one turn of the event loop are written together at its end, so that requests that arrive
- * meanwhile are parsed in one go.
+ * Sends an answer whose body is complete; `headers` are name and value by turns. Answers of one turn of the event
+ * loop are written together at its end, so that requests that arrive meanwhile are parsed in one go.
  */
-function atEndOfTurn(write: () => void): void {
-  if (queue.push(write) === 1) setImmediate(flush);
-}
-
-/** Sends an answer whose body is complete; `headers` are name and value by turns. */
 export function send(call: Call, status: number, headers: HeaderList, body: string, finish: Finish): void {
-  const { response, requestId } = call;
-  atEndOfTurn(() => {
-    // A caller who is gone gets nothing, but the call was counted and has to be in the books.
-    if (!response.headersSent && !response.destroyed) {
-      const all = ['X-Request-Id', requestId, ...API_HEADERS, ...headers];
-      if (status !== 304 && status !== 204) all.push('Content-Length', String(Buffer.byteLength(body)));
-      response.writeHead(status, all);
-      response.end(call.request.method === 'HEAD' ? undefined : body);
-    }
-    finish(call, status, Math.round((performance.now() - call.startedMs) * 1000) / 1000);
-  });
+  if (queue.push({ call, status, headers, body, finish }) === 1) setImmediate(flush);
 }
 
 /** Sends JSON. */

@@ -4,11 +4,11 @@ import { readQuery } from '../../http/query';
 import { readJson } from '../../http/readBody';
 import { sendJson, send, type Finish, type HeaderList } from '../../http/send';
 import { problemErrorOf, sendProblem } from '../../http/sendProblem';
-import { authorise } from '../../middleware/authorise';
 import { refusalProblem } from '../../policies/refusals';
 import { limitHeaders } from '../../presenters/limitHeaders';
 import { MeterUnavailable, type Ask, type Decision, type Meter } from '../../services/metering/meter';
 import { corsHeaders } from './cors';
+import { credentialsOf } from './credentialsOf';
 import type { Operation, Prepared } from './operation';
 
 type MeteredOperation = Extract<Operation, { access: 'key' }>;
@@ -66,7 +66,7 @@ export async function serveMetered(
   dependencies: MeteredDependencies,
 ): Promise<void> {
   const { meter, publicUrl, finish, onFault } = dependencies;
-  const { keyHash, site } = authorise(call.request, publicUrl);
+  const { keyHash, site } = credentialsOf(call.request, publicUrl);
   const ready = await prepare(operation, call);
   const isUnchanged = !ready.problem && matches(call, ready.etag);
   const units = isUnchanged || ready.problem ? 0 : ready.units;

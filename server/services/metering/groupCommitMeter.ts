@@ -1,6 +1,6 @@
 import type pg from 'pg';
 import { MeterUnavailable, type Ask, type Decision, type Meter, type Standing } from './meter';
-import { decisionsOf, TAKE, takeParameters, type TakeRow } from './takeStatement';
+import { arrayText, decisionsOf, TAKE, takeParameters, type TakeRow } from './takeStatement';
 
 interface Waiter {
   readonly ask: Ask;
@@ -26,6 +26,8 @@ export class GroupCommitMeter implements Meter {
   private waiting: Waiter[] = [];
   private isUnderWay = false;
   private pausedUntil = 0;
+  /** Kept between batches: fetching one from the pool for each costs as much as the statement's own sending. */
+  private client: pg.PoolClient | null = null;
   private readonly idle: (() => void)[] = [];
 
   /**
@@ -44,7 +46,7 @@ export class GroupCommitMeter implements Meter {
       if (!this.isUnderWay) {
         this.isUnderWay = true;
         // The calls of this turn of the event loop go together.
-        setImmediate(() => void this.run());
+        setImmediate(() => this.decideWaiting());
       }
     });
   }
@@ -64,24 +66,58 @@ export class GroupCommitMeter implements Meter {
 
   async close(): Promise<void> {
     if (this.isUnderWay) await new Promise<void>((resolve) => this.idle.push(resolve));
+    this.letGo(this.client);
     await this.pool.end();
   }
 
-  private async run(): Promise<void> {
-    while (this.waiting.length > 0) {
-      const batch = this.waiting.splice(0, BATCH_MAX);
-      try {
-        const parameters = takeParameters(batch.map(({ ask }) => ask));
-        const { rows } = await this.pool.query<TakeRow>({ name: 'take', text: TAKE, values: parameters });
-        const decisions = decisionsOf(rows[0] as TakeRow, parameters[1] as number[]);
-        batch.forEach(({ resolve }, i) => resolve(decisions[i] as Decision));
-      } catch (error) {
-        this.pausedUntil = this.clock() + PAUSE_MS;
-        const failed = [...batch, ...this.waiting.splice(0)];
-        for (const { reject } of failed) reject(new MeterUnavailable(RETRY_AFTER_S, { cause: error }));
-      }
+  private async connect(): Promise<pg.PoolClient> {
+    const client = await this.pool.connect();
+    client.on('error', (error) => this.letGo(client, error));
+    this.client = client;
+    return client;
+  }
+
+  /** Gives the connection back; one that failed is closed, and the next batch opens another. */
+  private letGo(client: pg.PoolClient | null, failure?: Error): void {
+    if (client === null || client !== this.client) return;
+    this.client = null;
+    client.release(failure);
+  }
+
+  private async ask(client: pg.PoolClient, asks: readonly Ask[]): Promise<Decision[]> {
+    const parameters = takeParameters(asks);
+    const values = parameters.map(arrayText);
+    const { rows } = await client.query<TakeRow>({ name: 'take', text: TAKE, values });
+    return decisionsOf(rows[0] as TakeRow, parameters[1]);
+  }
+
+  /** Decides those who wait; what arrives meanwhile goes next. */
+  private decideWaiting(): void {
+    const batch = this.waiting.splice(0, BATCH_MAX);
+    if (batch.length === 0) {
+      this.isUnderWay = false;
+      this.idle.splice(0).forEach((resolve) => resolve());
+      return;
     }
-    this.isUnderWay = false;
-    this.idle.splice(0).forEach((resolve) => resolve());
+    const asks = batch.map(({ ask }) => ask);
+    const decided = this.client
+      ? this.ask(this.client, asks)
+      : this.connect().then((client) => this.ask(client, asks));
+    decided.then(
+      (decisions) => {
+        // First the next batch, so that the database works while these are answered.
+        this.decideWaiting();
+        batch.forEach(({ resolve }, i) => resolve(decisions[i] as Decision));
+      },
+      (error: Error) => this.fail(batch, error),
+    );
+  }
+
+  private fail(batch: readonly Waiter[], error: Error): void {
+    this.letGo(this.client, error);
+    this.pausedUntil = this.clock() + PAUSE_MS;
+    for (const { reject } of [...batch, ...this.waiting.splice(0)])
+      reject(new MeterUnavailable(RETRY_AFTER_S, { cause: error }));
+    this.decideWaiting();
   }
 }
