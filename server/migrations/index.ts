@@ -1,7 +1,8 @@
 import { accountsAndKeys } from './0001-accounts-and-keys';
 import { metering } from './0002-metering';
 import { usage } from './0003-usage';
+import { consoleTables } from './0004-console';
 import type { Migration } from './migration';
 
 /** All steps of the schema, in order. */
-export const migrations: readonly Migration[] = [accountsAndKeys, metering, usage];
+export const migrations: readonly Migration[] = [accountsAndKeys, metering, usage, consoleTables];

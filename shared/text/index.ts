@@ -3,8 +3,10 @@ import { contradictions } from './en/contradictions';
 import { notes } from './en/notes';
 
 export { faults, rules, wanted } from './en/faults';
+export { account } from './en/account';
 export { cautions } from './en/cautions';
 export { costs } from './en/costs';
+export { mails } from './en/mails';
 export { problems } from './en/problems';
 
 export type NoteCode = keyof typeof notes;

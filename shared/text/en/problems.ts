@@ -37,6 +37,42 @@ export const problems = {
     cause: 'The key’s owner or an administrator revoked it; that is final.',
     cure: 'Make a new key in the console.',
   },
+  session_missing: {
+    status: 401,
+    title: 'Sign in first',
+    cause: 'This address of the console needs a session, and the request carries none.',
+    cure: 'Sign in in the console. Programs use /v1 with a key instead.',
+  },
+  session_ended: {
+    status: 401,
+    title: 'The session has ended',
+    cause: 'The session was ended, was not used for a day, or is older than it may be.',
+    cure: 'Refresh it where it is only due; sign in again otherwise.',
+  },
+  credentials_wrong: {
+    status: 401,
+    title: 'Address and password don’t fit',
+    cause: 'There is no account with this address and this password.',
+    cure: 'Look for a typing error, or ask for a link to set a new password. A new account needs its address confirmed first.',
+  },
+  not_same_origin: {
+    status: 403,
+    title: 'Only the console itself may ask this',
+    cause: 'The request did not come from a page of the console, or lacks the console’s header.',
+    cure: 'Open the console under its own address. Programs use /v1 with a key instead.',
+  },
+  role_missing: {
+    status: 403,
+    title: 'This needs another role',
+    cause: 'The account does not hold the role that this needs.',
+    cure: 'Add the role under Settings.',
+  },
+  password_wrong: {
+    status: 403,
+    title: 'The password does not fit',
+    cause: 'This asks for the account’s password once more, and the one given is not it.',
+    cure: 'Type it again, or ask for a link to set a new one.',
+  },
   origin_not_allowed: {
     status: 403,
     title: 'This site is not on the widget’s list',
@@ -73,6 +109,30 @@ export const problems = {
     cause: 'The address exists, but not for this method.',
     cure: 'Use one of the methods that the Allow header names. Lists and objects need POST.',
   },
+  already_made: {
+    status: 409,
+    title: 'This was made before',
+    cause: 'A key was made under the same Idempotency-Key; a key is shown once, so it can’t be shown again.',
+    cure: 'Use the key that was shown then. If it is lost, revoke it and make another under a new Idempotency-Key.',
+  },
+  key_settled: {
+    status: 409,
+    title: 'The key is past that',
+    cause: 'The key has ended, was replaced, was claimed or is not claimed yet, so this can’t be done with it.',
+    cure: 'Look at the key’s state in the list of keys.',
+  },
+  too_many_keys: {
+    status: 409,
+    title: 'There are too many keys',
+    cause: 'The account holds as many keys that have not ended as it may.',
+    cure: 'Revoke those that nobody uses any more.',
+  },
+  link_not_valid: {
+    status: 410,
+    title: 'This link does not work any more',
+    cause: 'The link was used already, its time is over, or a later one took its place.',
+    cure: 'Ask for a new one.',
+  },
   too_large: {
     status: 413,
     title: 'The body is too large',
@@ -96,6 +156,12 @@ export const problems = {
     title: 'Too many calls at once',
     cause: 'The account’s requests a second, with its burst, are used up.',
     cure: 'Wait for the seconds in Retry-After, then go on more slowly; put many calculations into one batch.',
+  },
+  too_many_attempts: {
+    status: 429,
+    title: 'Too many attempts',
+    cause: 'There were many attempts for this account or from this address in a short time.',
+    cure: 'Wait for the seconds in Retry-After; the right password works again then.',
   },
   quota_exhausted: {
     status: 429,
