@@ -1,0 +1,23 @@
+export type Role = 'developer' | 'photographer' | 'educator' | 'admin';
+
+/** A line of the navigation: a screen of the console, or a page that the service itself serves. */
+export interface NavigationLine {
+  readonly title: string;
+  readonly to: string;
+  readonly isServed?: boolean;
+  /** Who sees it; everyone where nothing is said. */
+  readonly roles?: readonly Role[];
+}
+
+const LINES: readonly NavigationLine[] = [
+  { title: 'Calculators', to: '/calculators' },
+  { title: 'API reference', to: '/docs', isServed: true },
+];
+
+/** The lines that a visitor with these roles sees, in order. */
+export function navigationFor(
+  roles: readonly Role[],
+  lines: readonly NavigationLine[] = LINES,
+): readonly NavigationLine[] {
+  return lines.filter((line) => !line.roles || line.roles.some((role) => roles.includes(role)));
+}
