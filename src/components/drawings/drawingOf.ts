@@ -1,0 +1,28 @@
+import { defineAsyncComponent, type Component } from 'vue';
+
+/** What is drawn beside an answer, and which parts of the answer it shows so well that no table need repeat them. */
+export interface Drawing {
+  readonly component: Component;
+  readonly covers: readonly string[];
+}
+
+const exposure = defineAsyncComponent(() => import('./ExposureDrawing.vue'));
+
+const drawings: Readonly<Record<string, Drawing>> = {
+  'exposure/value': { component: exposure, covers: [] },
+  'exposure/solve': { component: exposure, covers: [] },
+  'exposure/equivalents': {
+    component: defineAsyncComponent(() => import('./EquivalentsDrawing.vue')),
+    covers: ['rows'],
+  },
+  'exposure/difference': {
+    component: defineAsyncComponent(() => import('./DifferenceDrawing.vue')),
+    covers: [],
+  },
+  'light/convert': { component: defineAsyncComponent(() => import('./LightDrawing.vue')), covers: [] },
+};
+
+/** The drawing of a calculator, if it has one. */
+export function drawingOf(id: string): Drawing | undefined {
+  return drawings[id];
+}
