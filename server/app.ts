@@ -5,13 +5,16 @@ import type { Call } from './http/Call';
 import type { Finish } from './http/send';
 import { nothingHere, problemAnswers } from './middleware/problems';
 import { consoleHeaders } from './middleware/surfaceHeaders';
+import { apiRouter } from './routes/api';
 import { consoleFiles } from './routes/consoleFiles';
 import { docsRoutes } from './routes/docs';
 import { healthRoutes } from './routes/health';
+import { mailPages } from './routes/mailPages';
 import { metricsRoute } from './routes/metrics';
 import { problemPages } from './routes/problemPages';
 import { v1Handler } from './routes/v1';
 import { wellKnown } from './routes/wellKnown';
+import type { Console } from './services/console/openConsole';
 import type { Meter } from './services/metering/meter';
 import type { ServiceMetrics } from './services/metrics/serviceMetrics';
 
@@ -19,6 +22,7 @@ export interface AppDependencies {
   readonly config: Pick<Config, 'publicUrl' | 'trustProxyHops' | 'contactEmail' | 'metricsToken'>;
   readonly calculators: readonly AnyCalculator[];
   readonly version: string;
+  readonly console: Pick<Console, 'services' | 'mailbox'>;
   readonly meter: Meter;
   readonly metrics: ServiceMetrics;
   readonly now: () => Date;
@@ -51,6 +55,8 @@ export function createApp(dependencies: AppDependencies): Express {
   });
   app.use('/docs', docsRoutes(openapi));
   app.use('/problems', problemPages());
+  app.use(apiRouter({ ...dependencies, services: dependencies.console.services }));
+  if (dependencies.console.mailbox) app.use('/mail', mailPages(dependencies.console.mailbox));
   if (clientFolder) app.use(consoleFiles(clientFolder));
   app.use(nothingHere);
   app.use(problemAnswers({ ...dependencies, publicUrl }));

@@ -6,6 +6,7 @@ import type { Config } from './config';
 import { createHttpServer } from './http/createHttpServer';
 import { buildOpenapi } from './openapi/buildOpenapi';
 import { accessLog } from './services/accessLog';
+import { openConsole } from './services/console/openConsole';
 import { serviceLog } from './services/logging';
 import { countingPool } from './services/metering/countingPool';
 import { GroupCommitMeter } from './services/metering/groupCommitMeter';
@@ -23,6 +24,10 @@ export interface ServeOptions {
   readonly clientFolder: string | null;
   /** Where log lines go; standard output where left out. */
   readonly logFd?: number;
+  /** Where the built workers lie; beside this file's own build where left out. */
+  readonly workerFolder?: URL;
+  /** Hears the text of each of the console's statements, for tests that count the work done. */
+  readonly onStatement?: (sql: string) => void;
 }
 
 export interface Service {
@@ -34,7 +39,9 @@ export interface Service {
 const DRAIN_MS = 5_000;
 
 /** Connects, listens, and gives back how to stop: no new calls, those under way end, counts are committed. */
-export async function serve({ config, serviceUrl, clientFolder, logFd }: ServeOptions): Promise<Service> {
+export async function serve(options: ServeOptions): Promise<Service> {
+  const { config, serviceUrl, clientFolder, logFd, onStatement } = options;
+  const { workerFolder = new URL('./', import.meta.url) } = options;
   const { logger, flush } = serviceLog(config, logFd);
   const pool = countingPool(serviceUrl, config.countingPoolSize, (error) => {
     logger.warn({ reason: error.message }, 'a counting connection ended');
@@ -51,10 +58,14 @@ export async function serve({ config, serviceUrl, clientFolder, logFd }: ServeOp
   const log = accessLog(logger);
   const record = recordFinished(usage, now);
   const calculators = await loadCalculators();
+  const onTrouble = (what: string, reason: string) => logger.warn({ reason }, what);
+  const background = { onTrouble, onStatement };
+  const consoleSide = await openConsole({ config, serviceUrl, workerFolder, now, ...background });
   const app = createApp({
     config,
     calculators,
     version,
+    console: consoleSide,
     meter,
     metrics,
     now,
@@ -84,6 +95,7 @@ export async function serve({ config, serviceUrl, clientFolder, logFd }: ServeOp
     const cut = setTimeout(() => server.closeAllConnections(), DRAIN_MS);
     await closed;
     clearTimeout(cut);
+    await consoleSide.stop();
     await meter.close();
     await usage.close();
     await usageConnections.end();

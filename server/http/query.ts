@@ -23,7 +23,7 @@ export function readQuery(search: string): [string, string][] {
     const at = part.indexOf('=');
     const name = decode(at < 0 ? part : part.slice(0, at));
     const value = at < 0 ? '' : decode(part.slice(at + 1));
-    if (KEY_NAMES.has(name.toLowerCase()) || /evenfall_(server|page)_/.test(value)) {
+    if (KEY_NAMES.has(name.toLowerCase()) || /evenfall_(server|page|pass)_/.test(value)) {
       throw new ProblemError(
         'malformed_request',
         'Addresses end up in logs: send the key in the Authorization header, never in the address.',

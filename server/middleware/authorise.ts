@@ -1,7 +1,8 @@
 import { createHash } from 'node:crypto';
 import type { IncomingMessage } from 'node:http';
 import { ProblemError } from '../http/ProblemError';
-import { keyMissing, keyMistyped } from '../policies/refusals';
+import { isConsolePage } from '../policies/ownPage';
+import { keyMissing, keyMistyped, passElsewhere } from '../policies/refusals';
 import { kindOfKey } from '../services/keys/keyText';
 
 /** A call's key as far as it can be judged without the database. */
@@ -9,11 +10,13 @@ export interface Credentials {
   readonly keyHash: Buffer;
   /** The page's site, where the caller is a browser page of another site than the console's own. */
   readonly site: string | null;
+  /** A bearer of the try page, which stands for a key. */
+  readonly isPass: boolean;
 }
 
 /**
  * Reads the key of a call; a typing error is found by its checksum.
- * @throws ProblemError 401 without a key or with one that can't be, 403 for a server key in a browser page
+ * @throws ProblemError 401 without a key or with one that can't be, 403 for a server key in a browser page or a pass elsewhere
  */
 export function authorise(request: IncomingMessage, ownOrigin: string): Credentials {
   const header = request.headers.authorization;
@@ -25,6 +28,8 @@ export function authorise(request: IncomingMessage, ownOrigin: string): Credenti
   const origin = request.headers.origin ?? null;
   const site = origin === ownOrigin ? null : origin;
   if (kind === 'server' && site !== null) throw new ProblemError('server_key_in_browser');
+  const isPass = kind === 'pass';
+  if (isPass && !isConsolePage(request.headers, ownOrigin)) throw passElsewhere();
   const keyHash = createHash('sha256').update(key).digest();
-  return { keyHash, site: kind === 'page' ? origin : null };
+  return { keyHash, site: kind === 'page' ? origin : null, isPass };
 }

@@ -8,14 +8,7 @@ import {
 } from 'sequelize';
 
 export type EndReason =
-  | 'signed_out'
-  | 'ended'
-  | 'replaced'
-  | 'password'
-  | 'reuse'
-  | 'expired'
-  | 'closed'
-  | 'blocked';
+  'signed_out' | 'ended' | 'replaced' | 'password' | 'reuse' | 'expired' | 'closed' | 'blocked';
 
 export class Session extends Model<InferAttributes<Session>, InferCreationAttributes<Session>> {
   declare id: CreationOptional<string>;

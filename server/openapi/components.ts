@@ -89,20 +89,25 @@ function problemResponse(status: number) {
 /** The statuses that problems can have, in order. */
 export const PROBLEM_STATUSES = [...new Set(PROBLEM_CODES.map(statusOf))].sort((a, b) => a - b);
 
-/** Schemas, headers, problem answers and security schemes that the paths refer to. */
+/** Problem details, the headers that answers carry, and the problem answers by status. */
+export function registerProblems(registry: OpenAPIRegistry): void {
+  registry.registerComponent('schemas', 'Problem', PROBLEM as Component);
+  for (const [name, [description, header]] of Object.entries(HEADERS))
+    registry.registerComponent('headers', name, { description, schema: header } as Component);
+  for (const status of PROBLEM_STATUSES)
+    registry.registerComponent('responses', `Problem${status}`, problemResponse(status) as Component);
+}
+
+/** Schemas and security schemes that the paths refer to. */
 export function registerComponents(registry: OpenAPIRegistry, calculators: readonly AnyCalculator[]): void {
   const schema = (name: string, value: JsonSchema) =>
     registry.registerComponent('schemas', name, value as Component);
-  schema('Problem', PROBLEM);
+  registerProblems(registry);
   schema('Usage', jsonSchemaOf(usageSchema, 'output'));
   for (const calculator of calculators) {
     schema(schemaName(calculator.id, 'Input'), jsonSchemaOf(calculator.input, 'input'));
     schema(schemaName(calculator.id, 'Answer'), jsonSchemaOf(answerSchema(calculator.output), 'output'));
   }
-  for (const [name, [description, header]] of Object.entries(HEADERS))
-    registry.registerComponent('headers', name, { description, schema: header } as Component);
-  for (const status of PROBLEM_STATUSES)
-    registry.registerComponent('responses', `Problem${status}`, problemResponse(status) as Component);
   registry.registerComponent('securitySchemes', 'serverKey', {
     type: 'http',
     scheme: 'bearer',

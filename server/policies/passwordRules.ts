@@ -10,10 +10,7 @@ const LONGEST_REPEATED = 5;
 const SHORTEST_WORD = 3;
 
 export type PasswordFault =
-  | 'password_too_short'
-  | 'password_too_long'
-  | 'password_common'
-  | 'password_about_you';
+  'password_too_short' | 'password_too_long' | 'password_common' | 'password_about_you';
 
 /** One spelling for all that look alike (NIST SP 800-63B-4, 3.1.1.2: NFKC), as it is hashed. */
 export function normalPassword(password: string): string {

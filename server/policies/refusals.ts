@@ -18,6 +18,18 @@ export function keyMistyped(): ProblemError {
   return new ProblemError('key_invalid', detail, { headers: bearer('invalid_token') });
 }
 
+/** A pass is for the console's own pages. */
+export function passElsewhere(): ProblemError {
+  const detail = 'A pass works from the console’s own pages only. Programs send a server key.';
+  return new ProblemError('origin_not_allowed', detail);
+}
+
+/** A pass that ended is not known any more. */
+function passEnded(): ProblemError {
+  const detail = 'A pass works for ten minutes and as long as its session; the console asks for a new one.';
+  return new ProblemError('key_expired', detail, { headers: bearer('invalid_token') });
+}
+
 function overQuota(ask: Ask, { limit, used }: Standing): string {
   const left = Math.max(0, limit - used);
   return `The call costs ${ask.units} ${ask.units === 1 ? 'unit' : 'units'}; ${left} of this month's ${limit} are left.`;
@@ -61,6 +73,7 @@ export function refusalProblem(decision: Extract<Decision, { granted: false }>, 
     case 'account_blocked':
       return new ProblemError(refusal);
     case 'key_invalid': {
+      if (ask.isPass) return passEnded();
       const detail = 'The key is well formed, but there is no such key. Make one in the console under Keys.';
       return new ProblemError(refusal, detail, { headers: bearer('invalid_token') });
     }

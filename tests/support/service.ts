@@ -1,5 +1,6 @@
 import { openSync } from 'node:fs';
 import type { Server } from 'node:http';
+import { pathToFileURL } from 'node:url';
 import pg from 'pg';
 import request from 'supertest';
 import { afterAll } from 'vitest';
@@ -10,6 +11,7 @@ import { buildOpenapi } from '../../server/openapi/buildOpenapi';
 import { issueKeyForOperator } from '../../server/services/keys/issueKey';
 import { Contract, type ApiDocument } from './contract';
 import { openTestDatabase, type TestDatabase } from './database';
+import { testSettings } from './testSettings';
 
 export interface CallOptions {
   readonly key?: string;
@@ -89,7 +91,8 @@ export async function startService(
   const config = configFor(overrides);
   const { ownerUrl, serviceUrl } = database;
   const logFd = openSync(logFile, 'a');
-  const service = await serve({ config, ownerUrl, serviceUrl, clientFolder: null, logFd });
+  const workerFolder = pathToFileURL(`${testSettings().serverFolder}/`);
+  const service = await serve({ config, ownerUrl, serviceUrl, clientFolder: null, logFd, workerFolder });
   const owner = new pg.Pool({ connectionString: ownerUrl, max: 2 });
   owner.on('error', () => undefined);
   return {

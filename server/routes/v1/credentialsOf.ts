@@ -17,6 +17,7 @@ export function credentialsOf(request: IncomingMessage, ownOrigin: string): Cred
   const last = bySocket.get(request.socket);
   if (last && last.authorization === authorization && last.origin === origin) return last.credentials;
   const credentials = authorise(request, ownOrigin);
-  bySocket.set(request.socket, { authorization, origin, credentials });
+  // Where a pass is used from is asked at every call.
+  if (!credentials.isPass) bySocket.set(request.socket, { authorization, origin, credentials });
   return credentials;
 }

@@ -66,11 +66,11 @@ export async function serveMetered(
   dependencies: MeteredDependencies,
 ): Promise<void> {
   const { meter, publicUrl, finish, onFault } = dependencies;
-  const { keyHash, site } = credentialsOf(call.request, publicUrl);
+  const { keyHash, site, isPass } = credentialsOf(call.request, publicUrl);
   const ready = await prepare(operation, call);
   const isUnchanged = !ready.problem && matches(call, ready.etag);
   const units = isUnchanged || ready.problem ? 0 : ready.units;
-  const ask: Ask = { keyHash, units, needs: ready.needs, site };
+  const ask: Ask = { keyHash, units, needs: ready.needs, site, isPass };
   const decision = await decide(meter, ask);
   const { standing } = decision;
   call.facts.keyId = standing?.keyId ?? (decision.granted ? undefined : (decision.keyId ?? undefined));

@@ -72,6 +72,11 @@ const layers = [
     types: ['server/config', 'server/models/'],
     packages: [ANY, NODE],
   },
+  // The committed documents are written from the routes themselves.
+  {
+    of: 'server/openapi/writeDocuments.ts',
+    may: [...server('openapi', 'routes/api'), ...DATA],
+  },
   {
     of: 'server/openapi/',
     may: [...server('openapi', 'presenters', 'http'), ...DATA],

@@ -1,16 +1,19 @@
 import { createHash, randomBytes } from 'node:crypto';
 import { crc32 } from 'node:zlib';
 
-/** A server key is for programs on a server, a page key for one widget on listed sites. */
-export type KeyKind = 'server' | 'page';
+/**
+ * A server key is for programs on a server, a page key for one widget on listed sites. A pass stands for a server
+ * key on the console's own try page, for ten minutes.
+ */
+export type KeyKind = 'server' | 'page' | 'pass';
 
 const DIGITS = '0123456789ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz';
 const RANDOM_LENGTH = 32;
 const CHECKSUM_LENGTH = 6;
-const FORM = /^evenfall_(server|page)_([0-9A-Za-z]{32})([0-9A-Za-z]{6})$/;
+const FORM = /^evenfall_(server|page|pass)_([0-9A-Za-z]{32})([0-9A-Za-z]{6})$/;
 
 /** What secret scanners may look for; the checksum tells a key from a word of the same shape. */
-export const KEY_PATTERN = 'evenfall_(server|page)_[0-9A-Za-z]{38}';
+export const KEY_PATTERN = 'evenfall_(server|page|pass)_[0-9A-Za-z]{38}';
 
 /** Base-62 digits, each equally likely: bytes past the last full round of 62 are thrown away. */
 function randomDigits(length: number): string {

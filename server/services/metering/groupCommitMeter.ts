@@ -1,6 +1,6 @@
 import type pg from 'pg';
 import { MeterUnavailable, type Ask, type Decision, type Meter, type Standing } from './meter';
-import { arrayText, decisionsOf, TAKE, takeParameters, type TakeRow } from './takeStatement';
+import { arrayText, decisionsOf, takeParameters, takeStatement, type TakeRow } from './takeStatement';
 
 interface Waiter {
   readonly ask: Ask;
@@ -87,7 +87,7 @@ export class GroupCommitMeter implements Meter {
   private async ask(client: pg.PoolClient, asks: readonly Ask[]): Promise<Decision[]> {
     const parameters = takeParameters(asks);
     const values = parameters.map(arrayText);
-    const { rows } = await client.query<TakeRow>({ name: 'take', text: TAKE, values });
+    const { rows } = await client.query<TakeRow>({ ...takeStatement(asks), values });
     return decisionsOf(rows[0] as TakeRow, parameters[1]);
   }
 

@@ -8,6 +8,8 @@ export interface Ask {
   readonly needs: readonly string[];
   /** The page's site for a page key, as the Origin header gives it. */
   readonly site: string | null;
+  /** The hash is a pass's, which stands for a key. */
+  readonly isPass?: boolean;
 }
 
 /** Where the account stands after the call. */

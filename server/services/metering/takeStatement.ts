@@ -31,7 +31,14 @@ interface KeyState {
   readonly tokens: number;
 }
 
-export const TAKE = 'SELECT verdicts, at, keys FROM meter_take($1, $2, $3, $4, $5)';
+const TAKE = 'SELECT verdicts, at, keys FROM meter_take($1, $2, $3, $4, $5)';
+const TAKE_WITH_PASSES = 'SELECT verdicts, at, keys FROM meter_take_with_passes($1, $2, $3, $4, $5)';
+
+/** The statement for a batch; only one that holds a pass pays for looking passes up. */
+export function takeStatement(asks: readonly Ask[]): { readonly name: string; readonly text: string } {
+  const withPasses = asks.some(({ isPass }) => isPass === true);
+  return withPasses ? { name: 'take-with-passes', text: TAKE_WITH_PASSES } : { name: 'take', text: TAKE };
+}
 
 /** The parameters of `meter_take` for a batch; calls on one key share its hash. */
 export function takeParameters(

@@ -37,7 +37,9 @@ WITH used AS (UPDATE session_tokens SET used_at = service_now() WHERE hash = $1)
 INSERT INTO session_tokens (hash, session_id) VALUES ($3, $2)`;
 
 const ended = () =>
-  new ProblemError('session_ended', undefined, { headers: { 'WWW-Authenticate': 'Session realm="evenfall"' } });
+  new ProblemError('session_ended', undefined, {
+    headers: { 'WWW-Authenticate': 'Session realm="evenfall"' },
+  });
 
 async function find(services: ConsoleServices, hash: Buffer, transaction: Transaction) {
   const [session] = await services.database.rows<TokenRow>(FIND, [hash], transaction);

@@ -1,5 +1,10 @@
 import { createHash } from 'node:crypto';
-import { RateLimiterMemory, RateLimiterPostgres, RateLimiterRes, type RateLimiterAbstract } from 'rate-limiter-flexible';
+import {
+  RateLimiterMemory,
+  RateLimiterPostgres,
+  RateLimiterRes,
+  type RateLimiterAbstract,
+} from 'rate-limiter-flexible';
 import type { Sequelize } from 'sequelize';
 import { ProblemError } from '../../http/ProblemError';
 import { delayAfterS, FROM_ANYWHERE, FROM_ONE_PLACE, type DelayRule } from '../../policies/signInDelay';

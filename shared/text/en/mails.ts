@@ -93,9 +93,9 @@ export const mails = {
     action: { label: 'Set a new password', link: p.link },
   }),
   key_expires: (p: { name: string; shown: string; days: number; link: string }): MailWords => ({
-    subject: `Your Evenfall key “${p.name}” expires in ${p.days} days`,
+    subject: `Your Evenfall key “${p.name}” expires within ${p.days} days`,
     paragraphs: [
-      `The key “${p.name}” (${p.shown}) expires in ${p.days} days. Calls with it are refused from then on.`,
+      `The key “${p.name}” (${p.shown}) expires within ${p.days} days. Calls with it are refused from then on.`,
       'Rotate it in time: the new key works beside the old one for as long as you choose.',
     ],
     action: { label: 'Look at the key', link: p.link },

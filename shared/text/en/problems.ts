@@ -118,7 +118,8 @@ export const problems = {
   key_settled: {
     status: 409,
     title: 'The key is past that',
-    cause: 'The key has ended, was replaced, was claimed or is not claimed yet, so this can’t be done with it.',
+    cause:
+      'The key has ended, was replaced, was claimed or is not claimed yet, so this can’t be done with it.',
     cure: 'Look at the key’s state in the list of keys.',
   },
   too_many_keys: {
