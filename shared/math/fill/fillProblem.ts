@@ -1,0 +1,163 @@
+import { assignWithin, leastCount, type FlashTask } from './assignFlashes';
+import { cameraGrid, type CameraGrid, type GridLens, type GridShutter } from './cameraGrid';
+import { ABSENT_STOPS, countOf, mostAt } from './fillMisses';
+import type { FillWish } from './fillTypes';
+import { flashTables, type FlashTable } from './flashLevels';
+
+/** Counts stay below this, which marks a case that is not looked at. */
+export const NOT_LOOKED_AT = 65_535;
+
+/** A lens case with a shutter: everything but which of the equal apertures and speeds is taken. */
+export interface FillCase {
+  readonly lens: GridLens;
+  readonly shutter: GridShutter;
+  readonly table: FlashTable;
+  readonly front: FlashTask;
+  readonly rim: FlashTask | null;
+  /** how far the background is off; parts of 1/120 stop */
+  readonly backgroundCount: number;
+}
+
+/** A request with its marks laid out. */
+export interface FillProblem {
+  readonly wish: FillWish;
+  readonly grid: CameraGrid;
+  readonly tableAt: (shutter: GridShutter) => FlashTable;
+  /** which parts of the aim the flashes could serve at all; the others are missed by every recipe alike */
+  readonly parts: { readonly ratio: boolean; readonly rim: boolean };
+}
+
+/** Lays out a request's marks and flashes. */
+export function fillProblem(wish: FillWish): FillProblem {
+  const has = (role: string) => wish.flashes.some((flash) => flash.role === role);
+  const flashes = wish.flashes.filter(({ role }) => role !== 'rim' || wish.aim.rimStops !== null);
+  return {
+    wish,
+    grid: cameraGrid(wish.camera),
+    tableAt: flashTables(flashes, wish.camera),
+    parts: {
+      ratio: wish.aim.ratio !== null && has('key') && has('fill'),
+      rim: wish.aim.rimStops !== null && has('rim'),
+    },
+  };
+}
+
+/** How far the background comes out from its aim, stops. */
+export function backgroundMiss({ wish }: FillProblem, lens: GridLens, shutter: GridShutter): number {
+  return wish.scene.backgroundEv100 - wish.aim.backgroundStops - lens.stops - shutter.tv;
+}
+
+/** A case with what its flashes have to do, all in the light of the flash table: f/1, ISO 100, no filter. */
+export function caseOf(problem: FillProblem, lens: GridLens, shutter: GridShutter): FillCase {
+  const { wish, parts, tableAt } = problem;
+  const { aim, scene } = wish;
+  const lossFactor = 2 ** shutter.lossStops;
+  const unit = lossFactor / lens.factor;
+  return {
+    lens,
+    shutter,
+    table: tableAt(shutter),
+    front: {
+      ambient: 2 ** scene.subjectEv100 * shutter.mark.exact * lossFactor,
+      wished: 2 ** aim.subjectStops * unit,
+      ratio: parts.ratio ? aim.ratio : null,
+      isNeeded: false,
+    },
+    rim:
+      parts.rim && aim.rimStops !== null
+        ? { ambient: 0, wished: 2 ** aim.rimStops * unit, ratio: null, isNeeded: true }
+        : null,
+    backgroundCount: countOf(backgroundMiss(problem, lens, shutter)),
+  };
+}
+
+/**
+ * Whether a case keeps its background within a miss of so many parts, and its flashes front and rim.
+ * @param flashCount what is allowed for front and rim where that is not the same
+ */
+export function isWithin(one: FillCase, count: number, flashCount = count): boolean {
+  return one.backgroundCount <= count && areFlashesWithin(one, flashCount);
+}
+
+/** Whether the flashes of a case keep front and rim within a miss of so many parts. */
+export function areFlashesWithin(one: FillCase, flashCount: number): boolean {
+  if (assignWithin(one.table.front, one.front, flashCount) === null) return false;
+  return one.rim === null || assignWithin(one.table.rim, one.rim, flashCount) !== null;
+}
+
+/** The least misses of front and rim; parts of 1/120 stop; null where one of them is over the limit. */
+export function leastCounts(one: FillCase, limit: number): { front: number; rim: number } | null {
+  const front = leastCount(one.table.front, one.front, 0, limit);
+  if (front === null) return null;
+  const rim = one.rim === null ? 0 : leastCount(one.table.rim, one.rim, 0, limit);
+  return rim === null ? null : { front, rim };
+}
+
+/** Where the shutters from one Tv to another begin and end in a list that runs from slow to fast. */
+export function shutterRange(
+  shutters: readonly GridShutter[],
+  tvLow: number,
+  tvHigh: number,
+): [number, number] {
+  let [first, last] = [0, shutters.length];
+  while (first < last) {
+    const middle = (first + last) >> 1;
+    if ((shutters[middle]?.tv ?? 0) < tvLow) first = middle + 1;
+    else last = middle;
+  }
+  let end = first;
+  while (end < shutters.length && (shutters[end]?.tv ?? 0) <= tvHigh) end++;
+  return [first, end];
+}
+
+/**
+ * For each lens and shutter the least miss that could be, in parts of 1/120 stop: that of the background, that of a
+ * subject which ambient light alone makes too bright or all flashes at full leave too dark, and the same for the rim.
+ *
+ * @param mostCount cases whose background is off by more are not looked at
+ * @returns one entry a case, lens by lens, shutters from slow to fast
+ */
+export function lowerBounds(problem: FillProblem, mostCount: number): Uint16Array {
+  const { grid, wish, parts, tableAt } = problem;
+  const { shutters, lenses } = grid;
+  const bounds = new Uint16Array(lenses.length * shutters.length).fill(NOT_LOOKED_AT);
+  const wished = wish.scene.backgroundEv100 - wish.aim.backgroundStops;
+  const room = mostAt(mostCount);
+  const subject = 2 ** wish.aim.subjectStops;
+  const ambient = 2 ** wish.scene.subjectEv100;
+  const rim = 2 ** (wish.aim.rimStops ?? 0);
+  const known: { front: number; rim: number }[] = [];
+  const mostAtShutter = (t: number, shutter: GridShutter) => {
+    const table = tableAt(shutter);
+    const loss = 2 ** -shutter.lossStops;
+    return (known[t] ??= { front: (table.keyMost + table.fillMost) * loss, rim: table.rimMost * loss });
+  };
+  lenses.forEach((lens, x) => {
+    const [first, end] = shutterRange(shutters, wished - lens.stops - room, wished - lens.stops + room);
+    for (let t = first; t < end; t++) {
+      const shutter = shutters[t];
+      if (shutter === undefined) continue;
+      const most = mostAtShutter(t, shutter);
+      let miss = Math.abs(wished - lens.stops - shutter.tv);
+      const there = ambient * lens.factor * shutter.mark.exact;
+      if (there > subject) miss = Math.max(miss, Math.log2(there / subject));
+      const full = there + most.front * lens.factor;
+      if (full < subject) miss = Math.max(miss, Math.log2(subject / full));
+      if (parts.rim) {
+        const rimFull = most.rim * lens.factor;
+        if (rimFull < rim) miss = Math.max(miss, Math.min(ABSENT_STOPS, Math.log2(rim / rimFull)));
+      }
+      bounds[x * shutters.length + t] = Math.min(NOT_LOOKED_AT - 1, countOf(miss));
+    }
+  });
+  return bounds;
+}
+
+/** The case at a place in {@link lowerBounds}. */
+export function caseAt(problem: FillProblem, place: number): FillCase {
+  const { shutters, lenses } = problem.grid;
+  const lens = lenses[Math.floor(place / shutters.length)];
+  const shutter = shutters[place % shutters.length];
+  if (lens === undefined || shutter === undefined) throw new RangeError(`there is no case ${place}`);
+  return caseOf(problem, lens, shutter);
+}

@@ -1,0 +1,130 @@
+import type { CameraGrid, GridLens, GridShutter } from './cameraGrid';
+import { countOf, mostAt, sizesOf } from './fillMisses';
+import { handheldOf } from './fillOutcome';
+import type { FillCase, FillProblem } from './fillProblem';
+import type { FillMotion, FillOutcome, FillPreference, SyncKind } from './fillTypes';
+
+/**
+ * What is favoured, and how much a stop of it counts. A request's own wish outweighs everything but the aim; for the
+ * alternatives beside it the same wish counts just less than a stop of ISO, so that they stay usable.
+ */
+export interface FillObjective {
+  readonly prefer: FillPreference | null;
+  readonly weight: number;
+}
+
+export const OWN_WEIGHT = 10;
+export const ALTERNATIVE_WEIGHT = 0.9;
+
+/** 1/120 stop away from the aim outweighs all the rest, which stays below it. */
+const PER_PART = 1000;
+const MOST_BESIDE = 999;
+/** Each further part over half a step, a stop. */
+const PER_FURTHER_STOP = 20;
+const MOST_FURTHER = 400;
+const PER_HANDHELD_STOP = 4;
+const PER_GHOST_LEVEL = 3;
+const PER_ISO_STOP = 1;
+const FILTER_COST = 0.5;
+const HIGH_SPEED_COST = 0.5;
+const PER_STOP_SHORT_OF_RESERVE = 1;
+const RECYCLE_S_PER_POINT = 10;
+const MOST_RECYCLE = 3;
+/** Where nothing else decides: an aperture near f/4. Common practice, no source. */
+const PER_STOP_FROM_MIDDLE = 0.01;
+const MIDDLE_AV = 4;
+/** Times and powers are counted in stops above these. */
+const SHORTEST_LIGHT_S = 1e-6;
+const LEAST_POWER_STOPS = -14;
+
+const GHOST_LEVELS = { none: 0, faint: 1, clear: 2, dominant: 3 } as const;
+
+/** Half of the scale's step, stops: what still counts as on the aim. */
+export const halfStep = (grid: Pick<CameraGrid, 'steps'>): number => 0.5 / grid.steps;
+/** The same in whole parts of 1/120 stop. */
+export const onAimCount = (grid: Pick<CameraGrid, 'steps'>): number => countOf(halfStep(grid));
+
+/** What the settings of the camera cost by themselves. */
+export function cameraCost(
+  { grid, wish }: FillProblem,
+  { prefer, weight }: FillObjective,
+  lens: GridLens,
+  shutter: GridShutter,
+  aperturePosition: number,
+): number {
+  const { steps, aperture, iso } = grid;
+  const isoStops = (aperturePosition - lens.difference - iso[0]) / steps;
+  let cost = PER_ISO_STOP * isoStops + PER_HANDHELD_STOP * overStops(wish.motion, shutter);
+  if (lens.ndStops > 0) cost += FILTER_COST;
+  cost += PER_STOP_FROM_MIDDLE * Math.abs(aperturePosition / steps - MIDDLE_AV);
+  if (prefer === 'shallowFocus') cost += (weight * (aperturePosition - aperture[0])) / steps;
+  if (prefer === 'deepFocus') cost += (weight * (aperture[1] - aperturePosition)) / steps;
+  if (prefer === 'lowIso') cost += weight * isoStops;
+  return cost;
+}
+
+const overStops = (motion: FillMotion, shutter: GridShutter) =>
+  motion.handheld === null ? 0 : (handheldOf(motion, shutter.mark.exact)?.overStops ?? 0);
+
+const frozenCost = (lightS: number) => Math.max(0, Math.log2(lightS / SHORTEST_LIGHT_S));
+const batteryCost = (powerStops: number) => Math.max(0, powerStops - LEAST_POWER_STOPS);
+
+/** The least that a case can cost for what only its outcome tells, so that most cases need not be worked out. */
+export function leastOutcomeCost(one: FillCase, { prefer, weight }: FillObjective, limit: number): number {
+  const { front, shutter, table } = one;
+  const most = front.wished * 2 ** mostAt(limit);
+  if (prefer === 'frozen') {
+    const share = shutter.sync === 'normal' ? Math.min(1, front.ambient / most) : 1;
+    return weight * frozenCost(share * shutter.mark.exact);
+  }
+  if (prefer !== 'battery') return 0;
+  const needed = front.wished * 2 ** -mostAt(limit) - front.ambient;
+  if (!(needed > 0) || !(table.frontWhole > 0)) return 0;
+  return weight * batteryCost(Math.log2(needed / table.frontWhole) - 1e-9);
+}
+
+/** The mean time over which the subject's light comes in: ambient light takes the shutter's, a pulse its own. */
+export function gatheringS(outcome: FillOutcome, sync: SyncKind, shutterS: number): number {
+  const over = outcome.flashToAmbientStops;
+  if (sync !== 'normal' || over === null) return shutterS;
+  const share = 1 / (1 + 2 ** over);
+  const flashS = outcome.blur?.by === 'flash' ? outcome.blur.lightS : 0;
+  return share * shutterS + (1 - share) * flashS;
+}
+
+/** What an outcome costs beside the camera's settings and its largest miss. */
+export function outcomeCost(
+  problem: FillProblem,
+  { prefer, weight }: FillObjective,
+  outcome: FillOutcome,
+  sync: SyncKind,
+  shutterS: number,
+): number {
+  const sizes = sizesOf(outcome.misses, problem.parts);
+  const over = sizes.map((size) => Math.max(0, size - halfStep(problem.grid)));
+  const further = over.reduce((sum, one) => sum + one, 0) - Math.max(...over);
+  let cost = Math.min(MOST_FURTHER, PER_FURTHER_STOP * further);
+  if (outcome.ghost !== null) cost += PER_GHOST_LEVEL * GHOST_LEVELS[outcome.ghost.visibility];
+  if (sync === 'highSpeed') cost += HIGH_SPEED_COST;
+  if (outcome.reserveStops !== null)
+    cost += PER_STOP_SHORT_OF_RESERVE * Math.max(0, 1 - outcome.reserveStops);
+  if (outcome.recycleS !== null) cost += Math.min(MOST_RECYCLE, outcome.recycleS / RECYCLE_S_PER_POINT);
+  if (prefer === 'frozen') cost += weight * frozenCost(gatheringS(outcome, sync, shutterS));
+  if (prefer === 'battery' && outcome.reserveStops !== null)
+    cost += weight * batteryCost(-outcome.reserveStops);
+  return cost;
+}
+
+/** The largest miss among the parts of the aim that the flashes can serve, stops. */
+export function largestMiss(problem: FillProblem, outcome: FillOutcome): number {
+  return Math.max(...sizesOf(outcome.misses, problem.parts));
+}
+
+/** How far an outcome is from the parts of the aim that the flashes can serve, in parts of 1/120 stop. */
+export function missCount(problem: FillProblem, outcome: FillOutcome): number {
+  return countOf(largestMiss(problem, outcome));
+}
+
+/** Parts of 1/120 stop first, everything else behind them. */
+export const scoreOf = (count: number, cost: number): number =>
+  PER_PART * count + Math.min(MOST_BESIDE, cost);
