@@ -2,6 +2,7 @@ import type { Request, Response } from 'express';
 import { ipKeyGenerator } from 'express-rate-limit';
 import type { Call } from '../../http/Call';
 import { cookieLine, readCookie } from '../../http/cookies';
+import { ABSOLUTE_DAYS } from '../../policies/sessionLife';
 import { readAccess, type AccessClaims } from '../../services/sessions/accessToken';
 import type { GivenSession } from '../../services/sessions/beginSession';
 import type { ConsoleServices, Origin } from '../../services/console/ConsoleServices';
@@ -9,6 +10,8 @@ import type { SignedIn } from '../../services/sessions/liveSession';
 
 export const REFRESH_PATH = '/api/session/refresh';
 const AGENT_MAX = 300;
+/** As long as any session may last; when this one ends is the database's to say. */
+const COOKIE_S = ABSOLUTE_DAYS * 86_400;
 /** Providers hand a customer a /56 of IPv6 addresses: they are one place. */
 const IPV6_PLACE = 56;
 
@@ -62,11 +65,10 @@ export class Visit {
   }
 
   /** Gives the browser a session, or the access token alone where another tab has the refresh token. */
-  giveCookies({ access, refresh, sessionEndsAt }: GivenSession): void {
-    const seconds = (sessionEndsAt.getTime() - this.services.now().getTime()) / 1000;
+  giveCookies({ access, refresh }: GivenSession): void {
     // The access token holds for minutes; its cookie stays, so that a refresh or a sign-out knows the session.
-    this.setCookie('access', access, seconds);
-    if (refresh !== null) this.setCookie('refresh', refresh, seconds);
+    this.setCookie('access', access, COOKIE_S);
+    if (refresh !== null) this.setCookie('refresh', refresh, COOKIE_S);
   }
 
   dropCookies(): void {

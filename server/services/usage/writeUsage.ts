@@ -42,7 +42,7 @@ function hourParameters(hours: readonly HourCount[]): unknown[] {
 }
 
 /** Writes what was gathered: counts are added up, log lines appended, logs kept to their length. */
-export async function writeUsage(pool: pg.Pool, { hours, logs }: Gathered): Promise<void> {
+export async function writeUsage(pool: pg.Pool | pg.Client, { hours, logs }: Gathered): Promise<void> {
   if (hours.length > 0) await pool.query(ADD_HOURS, hourParameters(hours));
   if (logs.size === 0) return;
   const entries = [...logs].map(([keyId, lines]) => ({ keyId, lines: lines.slice(-LOG_LENGTH) }));
