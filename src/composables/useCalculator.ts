@@ -1,4 +1,5 @@
 import { shallowRef, watch, type ShallowRef } from 'vue';
+import './zodWithoutEval';
 import { calculatorList } from '../../shared/calculators';
 import type { AnyCalculator } from '../../shared/contract/defineCalculator';
 

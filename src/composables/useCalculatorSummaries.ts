@@ -1,4 +1,5 @@
 import { onBeforeUnmount, onMounted, reactive } from 'vue';
+import './zodWithoutEval';
 import { calculatorList } from '../../shared/calculators';
 
 /**

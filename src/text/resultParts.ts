@@ -10,7 +10,13 @@ interface Titled {
 }
 
 /** A single value; of a setting also what its mark leaves unsaid, the exact value and the residual. */
-export type ValuePart = Titled & { readonly kind: 'value'; readonly text: string; readonly exactly?: string };
+export type ValuePart = Titled & {
+  readonly kind: 'value';
+  readonly text: string;
+  readonly exactly?: string;
+  /** The code behind a choice's words. */
+  readonly code?: string;
+};
 
 /** A list as rows under one heading each. */
 export type TablePart = Titled & {
@@ -77,7 +83,8 @@ function partOf(field: Field, value: unknown): ResultPart[] {
     return [{ ...titled, kind: 'group', parts: resultParts(field.fields ?? [], value) }];
   if (field.kind === 'list' && field.item?.fields && Array.isArray(value))
     return listParts(titled, field.item.fields, value);
-  return [{ ...titled, kind: 'value', text: valueText(field, value) }];
+  const code = field.kind === 'choice' && typeof value === 'string' ? value : undefined;
+  return [{ ...titled, kind: 'value', text: valueText(field, value), code }];
 }
 
 /** An answer's result in the order and the words of its output schema. */
@@ -91,7 +98,7 @@ export function resultParts(fields: readonly Field[], result: unknown): ResultPa
  */
 export function headlineOf(parts: readonly ResultPart[]): ValuePart[] {
   const values = parts.filter((part) => part.kind === 'value');
-  const named = values.find(({ name }) => name === values[0]?.text);
+  const named = values.find(({ name }) => name === values[0]?.code);
   if (named) return [named];
   return values.filter(({ name, text }) => text !== '–' && !/^by[A-Z]/.test(name)).slice(0, 2);
 }
