@@ -1,9 +1,10 @@
 import {
   backgroundMiss,
-  caseAt,
+  caseOf,
+  fillProblem,
   isWithin,
-  lowerBounds,
-  NOT_LOOKED_AT,
+  someCase,
+  someNearBackground,
   type FillProblem,
 } from './fillProblem';
 import { onAimCount } from './fillScore';
@@ -18,20 +19,17 @@ const withAim = (wish: FillWish, aim: Partial<FillAim>): FillWish => ({
 
 /** The front's least miss by light alone over all cases whose background is right: + is too bright, − too dark. */
 function frontMiss(problem: FillProblem): number | null {
-  const count = onAimCount(problem.grid);
-  const bounds = lowerBounds(problem, count);
   let least: number | null = null;
-  for (let place = 0; place < bounds.length; place++) {
-    if ((bounds[place] ?? NOT_LOOKED_AT) === NOT_LOOKED_AT) continue;
-    const { front, table, shutter, backgroundCount } = caseAt(problem, place);
-    if (backgroundCount > count) continue;
-    const most = front.ambient + (table.keyMost + table.fillMost) * (shutter.sync === 'none' ? 0 : 1);
+  someNearBackground(problem, onAimCount(problem.grid), (lens, shutter) => {
+    const { front, table } = caseOf(problem, lens, shutter);
+    const most = front.ambient + table.keyMost + table.fillMost;
     const miss =
       front.ambient > front.wished
         ? Math.log2(front.ambient / front.wished)
         : Math.min(0, Math.log2(most / front.wished));
     if (least === null || Math.abs(miss) < Math.abs(least)) least = miss;
-  }
+    return false;
+  });
   return least;
 }
 
@@ -48,65 +46,36 @@ function backgroundRoom(problem: FillProblem): number | null {
     for (const sign of [1, -1]) {
       const shifted = wish.aim.backgroundStops + (sign * ring) / grid.steps;
       const moved = { ...problem, wish: withAim(wish, { backgroundStops: shifted }) };
-      const bounds = lowerBounds(moved, count);
-      for (let place = 0; place < bounds.length; place++) {
-        if ((bounds[place] ?? NOT_LOOKED_AT) > count) continue;
-        const one = caseAt(moved, place);
-        if (!isWithin(one, count)) continue;
-        const miss = backgroundMiss(problem, one.lens, one.shutter);
-        if (best === null || Math.abs(miss) < Math.abs(best)) best = miss;
-      }
+      someCase(moved, count, (lens, shutter) => {
+        const miss = backgroundMiss(problem, lens, shutter);
+        if (best !== null && Math.abs(miss) >= Math.abs(best)) return false;
+        if (isWithin(caseOf(moved, lens, shutter), count)) best = miss;
+        return false;
+      });
     }
     if (best !== null) return best;
   }
   return null;
 }
 
-/** A changed request, where it brings what is left onto the aim. */
-function changed(
-  limit: FillLimit,
-  shortByStops: number | null,
-  wish: FillWish,
-  aim: FillAim,
-): LimitInTheWay | null {
-  const best = bestOf(wish, aim);
-  return best && best.leavesStops === 0 ? { limit, shortByStops, ...best } : null;
-}
-
-/** What of the scene or of the aim itself could be given up. */
-export function aimsGivenUp(search: FillSearch): (LimitInTheWay | null)[] {
-  const { problem } = search;
-  const { wish } = problem;
+/** What of the scene or of the aim itself could be given up; only what brings the rest onto the aim is told. */
+export function aimsGivenUp({ problem }: FillSearch): (LimitInTheWay | null)[] {
+  const { wish, parts } = problem;
   const { aim, scene } = wish;
-  const front = frontMiss(problem);
-  const room = backgroundRoom(problem);
-  const isTooBright = front !== null && front > 0;
+  const front = frontMiss(problem) ?? 0;
+  const room = backgroundRoom(problem) ?? 0;
+  const give = (isAsked: boolean, limit: FillLimit, shortByStops: number | null, changed: FillWish) => {
+    const best = isAsked ? bestOf(fillProblem(changed, problem), aim) : null;
+    return best && best.leavesStops === 0 ? { limit, shortByStops, ...best } : null;
+  };
+  const shaded = { ...wish, scene: { ...scene, subjectEv100: scene.subjectEv100 - front } };
+  const otherBackground = withAim(wish, { backgroundStops: aim.backgroundStops + room });
+  const otherSubject = withAim(wish, { subjectStops: aim.subjectStops + front });
   return [
-    isTooBright
-      ? changed(
-          'ambient_too_bright',
-          front,
-          { ...wish, scene: { ...scene, subjectEv100: scene.subjectEv100 - front } },
-          aim,
-        )
-      : null,
-    room === null
-      ? null
-      : changed(
-          'aim_background',
-          Math.abs(room),
-          withAim(wish, { backgroundStops: aim.backgroundStops + room }),
-          aim,
-        ),
-    front === null || front === 0
-      ? null
-      : changed(
-          'aim_subject',
-          Math.abs(front),
-          withAim(wish, { subjectStops: aim.subjectStops + front }),
-          aim,
-        ),
-    problem.parts.ratio ? changed('aim_ratio', null, withAim(wish, { ratio: null }), aim) : null,
-    problem.parts.rim ? changed('aim_rim', null, withAim(wish, { rimStops: null }), aim) : null,
+    give(front > 0, 'ambient_too_bright', front, shaded),
+    give(room !== 0, 'aim_background', Math.abs(room), otherBackground),
+    give(front !== 0, 'aim_subject', Math.abs(front), otherSubject),
+    give(parts.ratio, 'aim_ratio', null, withAim(wish, { ratio: null })),
+    give(parts.rim, 'aim_rim', null, withAim(wish, { rimStops: null })),
   ];
 }

@@ -7,6 +7,8 @@ const EDGE = 1e-9;
 
 /** A shutter mark, and what a flash can do with it. */
 export interface GridShutter {
+  /** position on the scale, whole */
+  readonly step: number;
   readonly mark: Mark;
   /** Tv = −log2(t), stops */
   readonly tv: number;
@@ -56,16 +58,18 @@ export function syncAt(camera: FillCamera, shutterS: number): { sync: SyncKind; 
   return { sync: 'highSpeed', lossStops: Math.log1p(curtainS / shutterS) / Math.LN2 + extraLossStops };
 }
 
-function shuttersOf(camera: FillCamera): GridShutter[] {
+function shuttersOf(camera: FillCamera, before: readonly GridShutter[]): GridShutter[] {
   const { scale, shutterSlowestS, shutterFastestS } = camera;
   // The slowest time stands at the lowest position.
   const [low, high] = positions('shutter', scale, shutterSlowestS, shutterFastestS);
+  const known = new Map(before.map(({ step, mark }) => [step, mark]));
   const shutters: GridShutter[] = [];
   for (let position = low; position <= high; position++) {
-    const mark = markAt('shutter', scale, position);
+    // Naming a mark takes longer than anything else here.
+    const mark = known.get(position) ?? markAt('shutter', scale, position);
     // Beyond the slowest marking a step is given in whole seconds, which may lie just beyond the limit.
     if (mark.exact > shutterSlowestS * (1 + EDGE)) continue;
-    shutters.push({ mark, tv: -Math.log2(mark.exact), ...syncAt(camera, mark.exact) });
+    shutters.push({ step: position, mark, tv: -Math.log2(mark.exact), ...syncAt(camera, mark.exact) });
   }
   return shutters;
 }
@@ -92,12 +96,13 @@ function lensesOf(
  * All marks that lie within a camera's limits. Times beyond 30 s are the scale's steps in whole seconds.
  *
  * @param camera limits, filters, sync
+ * @param before shutters of the same scale that are known already
  * @returns the grid; empty parts where a limit leaves no mark
  * @throws RangeError when a limit is no positive number
  * @example f/2.8 to f/4 in thirds: positions 9 to 12
  * @source ISO 516, ISO 517 and trade practice for the marks; derivation
  */
-export function cameraGrid(camera: FillCamera): CameraGrid {
+export function cameraGrid(camera: FillCamera, before: readonly GridShutter[] = []): CameraGrid {
   const { scale } = camera;
   const steps = stepsPerStop(scale);
   const aperture = positions('aperture', scale, camera.apertureMin, camera.apertureMax);
@@ -107,7 +112,7 @@ export function cameraGrid(camera: FillCamera): CameraGrid {
     steps,
     aperture,
     iso,
-    shutters: shuttersOf(camera),
+    shutters: shuttersOf(camera, before),
     lenses: lensesOf(aperture, iso, camera.ndStops, steps),
   };
 }

@@ -4,8 +4,10 @@ import { ABSENT_STOPS, countOf, mostAt } from './fillMisses';
 import type { FillWish } from './fillTypes';
 import { flashTables, type FlashTable } from './flashLevels';
 
-/** Counts stay below this, which marks a case that is not looked at. */
-export const NOT_LOOKED_AT = 65_535;
+/** More than any miss, in parts of 1/120 stop: light spans less than 500 stops. */
+export const ANY_COUNT = 60_000;
+/** Two to this is still a finite number beside light of any strength. */
+const MOST_ROOM_STOPS = 500;
 
 /** A lens case with a shutter: everything but which of the equal apertures and speeds is taken. */
 export interface FillCase {
@@ -27,14 +29,23 @@ export interface FillProblem {
   readonly parts: { readonly ratio: boolean; readonly rim: boolean };
 }
 
-/** Lays out a request's marks and flashes. */
-export function fillProblem(wish: FillWish): FillProblem {
+/**
+ * Lays out a request's marks and flashes.
+ * @param before a problem like it, of which what is the same is used again
+ */
+export function fillProblem(wish: FillWish, before?: FillProblem): FillProblem {
   const has = (role: string) => wish.flashes.some((flash) => flash.role === role);
   const flashes = wish.flashes.filter(({ role }) => role !== 'rim' || wish.aim.rimStops !== null);
+  const isSameCamera = before?.wish.camera === wish.camera;
+  const isSameRim = (before?.wish.aim.rimStops === null) === (wish.aim.rimStops === null);
+  const isSameFlash =
+    before?.wish.flashes === wish.flashes &&
+    before.wish.camera.shutCurtainS === wish.camera.shutCurtainS &&
+    isSameRim;
   return {
     wish,
-    grid: cameraGrid(wish.camera),
-    tableAt: flashTables(flashes, wish.camera),
+    grid: before && isSameCamera ? before.grid : cameraGrid(wish.camera, before?.grid.shutters),
+    tableAt: before && isSameFlash ? before.tableAt : flashTables(flashes, wish.camera),
     parts: {
       ratio: wish.aim.ratio !== null && has('key') && has('fill'),
       rim: wish.aim.rimStops !== null && has('rim'),
@@ -111,53 +122,68 @@ export function shutterRange(
 }
 
 /**
- * For each lens and shutter the least miss that could be, in parts of 1/120 stop: that of the background, that of a
- * subject which ambient light alone makes too bright or all flashes at full leave too dark, and the same for the rim.
+ * Goes through the lenses and shutters that keep the background within a miss.
  *
- * @param mostCount cases whose background is off by more are not looked at
- * @returns one entry a case, lens by lens, shutters from slow to fast
+ * @param count the miss; parts of 1/120 stop
+ * @param visit what is done with each; true ends the round
+ * @returns whether a visit ended it
  */
-export function lowerBounds(problem: FillProblem, mostCount: number): Uint16Array {
-  const { grid, wish, parts, tableAt } = problem;
+export function someNearBackground(
+  problem: FillProblem,
+  count: number,
+  visit: (lens: GridLens, shutter: GridShutter, place: number) => boolean,
+): boolean {
+  const { grid, wish } = problem;
   const { shutters, lenses } = grid;
-  const bounds = new Uint16Array(lenses.length * shutters.length).fill(NOT_LOOKED_AT);
   const wished = wish.scene.backgroundEv100 - wish.aim.backgroundStops;
-  const room = mostAt(mostCount);
-  const subject = 2 ** wish.aim.subjectStops;
-  const ambient = 2 ** wish.scene.subjectEv100;
-  const rim = 2 ** (wish.aim.rimStops ?? 0);
-  const known: { front: number; rim: number }[] = [];
-  const mostAtShutter = (t: number, shutter: GridShutter) => {
-    const table = tableAt(shutter);
-    const loss = 2 ** -shutter.lossStops;
-    return (known[t] ??= { front: (table.keyMost + table.fillMost) * loss, rim: table.rimMost * loss });
-  };
-  lenses.forEach((lens, x) => {
-    const [first, end] = shutterRange(shutters, wished - lens.stops - room, wished - lens.stops + room);
-    for (let t = first; t < end; t++) {
-      const shutter = shutters[t];
-      if (shutter === undefined) continue;
-      const most = mostAtShutter(t, shutter);
-      let miss = Math.abs(wished - lens.stops - shutter.tv);
-      const there = ambient * lens.factor * shutter.mark.exact;
-      if (there > subject) miss = Math.max(miss, Math.log2(there / subject));
-      const full = there + most.front * lens.factor;
-      if (full < subject) miss = Math.max(miss, Math.log2(subject / full));
-      if (parts.rim) {
-        const rimFull = most.rim * lens.factor;
-        if (rimFull < rim) miss = Math.max(miss, Math.min(ABSENT_STOPS, Math.log2(rim / rimFull)));
-      }
-      bounds[x * shutters.length + t] = Math.min(NOT_LOOKED_AT - 1, countOf(miss));
+  const room = mostAt(count);
+  for (const lens of lenses) {
+    const tv = wished - lens.stops;
+    const [first, end] = shutterRange(shutters, tv - room, tv + room);
+    for (let place = first; place < end; place++) {
+      const shutter = shutters[place];
+      if (shutter !== undefined && visit(lens, shutter, place)) return true;
     }
-  });
-  return bounds;
+  }
+  return false;
 }
 
-/** The case at a place in {@link lowerBounds}. */
-export function caseAt(problem: FillProblem, place: number): FillCase {
-  const { shutters, lenses } = problem.grid;
-  const lens = lenses[Math.floor(place / shutters.length)];
-  const shutter = shutters[place % shutters.length];
-  if (lens === undefined || shutter === undefined) throw new RangeError(`there is no case ${place}`);
-  return caseOf(problem, lens, shutter);
+/**
+ * Goes through the lenses and shutters that may keep within a miss, each with the least miss that it can have: that of
+ * the background, that of a subject which ambient light alone makes too bright or all flashes at full leave too dark,
+ * and the same for the rim.
+ *
+ * @param count the miss; parts of 1/120 stop
+ * @param visit what is done with a case; true ends the round
+ * @returns whether a visit ended it
+ */
+export function someCase(
+  problem: FillProblem,
+  count: number,
+  visit: (lens: GridLens, shutter: GridShutter, bound: number) => boolean,
+): boolean {
+  const { wish, parts, tableAt } = problem;
+  const room = mostAt(count);
+  const factor = 2 ** Math.min(room, MOST_ROOM_STOPS);
+  const subject = 2 ** wish.aim.subjectStops;
+  const ambient = 2 ** wish.scene.subjectEv100;
+  const rim = parts.rim && room < ABSENT_STOPS ? 2 ** (wish.aim.rimStops ?? 0) : 0;
+  const known: { front: number; rim: number }[] = [];
+  const mostAtShutter = (place: number, shutter: GridShutter) => {
+    const table = tableAt(shutter);
+    const loss = 2 ** -shutter.lossStops;
+    return (known[place] ??= { front: (table.keyMost + table.fillMost) * loss, rim: table.rimMost * loss });
+  };
+  return someNearBackground(problem, count, (lens, shutter, place) => {
+    const there = ambient * lens.factor * shutter.mark.exact;
+    if (there > subject * factor) return false;
+    const most = mostAtShutter(place, shutter);
+    const full = there + most.front * lens.factor;
+    if (full * factor < subject || most.rim * lens.factor * factor < rim) return false;
+    let miss = Math.abs(backgroundMiss(problem, lens, shutter));
+    if (there > subject) miss = Math.max(miss, Math.log2(there / subject));
+    else if (full < subject) miss = Math.max(miss, Math.log2(subject / full));
+    const bound = countOf(miss);
+    return bound <= count && visit(lens, shutter, bound);
+  });
 }

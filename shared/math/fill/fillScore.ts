@@ -2,7 +2,7 @@ import type { CameraGrid, GridLens, GridShutter } from './cameraGrid';
 import { countOf, mostAt, sizesOf } from './fillMisses';
 import { handheldOf } from './fillOutcome';
 import type { FillCase, FillProblem } from './fillProblem';
-import type { FillMotion, FillOutcome, FillPreference, SyncKind } from './fillTypes';
+import type { FillOutcome, FillPreference, SyncKind } from './fillTypes';
 
 /**
  * What is favoured, and how much a stop of it counts. A request's own wish outweighs everything but the aim; for the
@@ -44,27 +44,25 @@ export const halfStep = (grid: Pick<CameraGrid, 'steps'>): number => 0.5 / grid.
 /** The same in whole parts of 1/120 stop. */
 export const onAimCount = (grid: Pick<CameraGrid, 'steps'>): number => countOf(halfStep(grid));
 
-/** What the settings of the camera cost by themselves. */
-export function cameraCost(
-  { grid, wish }: FillProblem,
-  { prefer, weight }: FillObjective,
-  lens: GridLens,
-  shutter: GridShutter,
-  aperturePosition: number,
-): number {
-  const { steps, aperture, iso } = grid;
-  const isoStops = (aperturePosition - lens.difference - iso[0]) / steps;
-  let cost = PER_ISO_STOP * isoStops + PER_HANDHELD_STOP * overStops(wish.motion, shutter);
-  if (lens.ndStops > 0) cost += FILTER_COST;
-  cost += PER_STOP_FROM_MIDDLE * Math.abs(aperturePosition / steps - MIDDLE_AV);
-  if (prefer === 'shallowFocus') cost += (weight * (aperturePosition - aperture[0])) / steps;
-  if (prefer === 'deepFocus') cost += (weight * (aperture[1] - aperturePosition)) / steps;
-  if (prefer === 'lowIso') cost += weight * isoStops;
-  return cost;
+/** What the shutter and the filter of a case cost, whichever aperture and speed are taken. */
+export function caseCost({ wish }: FillProblem, lens: GridLens, shutter: GridShutter): number {
+  const over = handheldOf(wish.motion, shutter.mark.exact)?.overStops ?? 0;
+  return PER_HANDHELD_STOP * over + (lens.ndStops > 0 ? FILTER_COST : 0);
 }
 
-const overStops = (motion: FillMotion, shutter: GridShutter) =>
-  motion.handheld === null ? 0 : (handheldOf(motion, shutter.mark.exact)?.overStops ?? 0);
+/** What the aperture, and the speed that goes with it, cost. */
+export function settingCost(
+  { steps, aperture, iso }: CameraGrid,
+  { prefer, weight }: FillObjective,
+  lens: GridLens,
+  position: number,
+): number {
+  const isoStops = (position - lens.difference - iso[0]) / steps;
+  const cost = PER_ISO_STOP * isoStops + PER_STOP_FROM_MIDDLE * Math.abs(position / steps - MIDDLE_AV);
+  if (prefer === 'shallowFocus') return cost + (weight * (position - aperture[0])) / steps;
+  if (prefer === 'deepFocus') return cost + (weight * (aperture[1] - position)) / steps;
+  return prefer === 'lowIso' ? cost + weight * isoStops : cost;
+}
 
 const frozenCost = (lightS: number) => Math.max(0, Math.log2(lightS / SHORTEST_LIGHT_S));
 const batteryCost = (powerStops: number) => Math.max(0, powerStops - LEAST_POWER_STOPS);

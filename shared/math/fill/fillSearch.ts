@@ -1,21 +1,23 @@
 import { distancesFor, easiestAssignment, type Assignment, type FlashTask } from './assignFlashes';
 import { fillOutcome } from './fillOutcome';
 import {
-  caseAt,
+  ANY_COUNT,
+  caseOf,
   isWithin,
   leastCounts,
-  lowerBounds,
-  NOT_LOOKED_AT,
+  someCase,
   type FillCase,
   type FillProblem,
 } from './fillProblem';
+import type { GridLens, GridShutter } from './cameraGrid';
 import {
-  cameraCost,
+  caseCost,
   leastOutcomeCost,
   missCount,
   onAimCount,
   outcomeCost,
   scoreOf,
+  settingCost,
   type FillObjective,
 } from './fillScore';
 import {
@@ -32,6 +34,7 @@ import { markAt } from '../marks';
 /** A case with its flashes set. */
 interface Solved {
   readonly one: FillCase;
+  readonly cost: number;
   readonly sync: SyncKind;
   readonly used: readonly UsedFlash[];
   readonly outcome: FillOutcome;
@@ -44,6 +47,21 @@ export interface Found {
   readonly stops: readonly [number, number, number];
 }
 
+interface BoundedCase {
+  readonly lens: GridLens;
+  readonly shutter: GridShutter;
+  /** the least miss that it can have; parts of 1/120 stop */
+  readonly bound: number;
+}
+
+/** A case with what of its score is known before it is worked out. */
+interface KnownCase {
+  readonly one: FillCase;
+  readonly bound: number;
+  /** of shutter and filter */
+  readonly cost: number;
+}
+
 /** What is known of a problem while recipes are looked for. */
 export interface FillSearch {
   readonly problem: FillProblem;
@@ -52,30 +70,27 @@ export interface FillSearch {
   /** up to this miss recipes are given; parts of 1/120 stop */
   readonly limit: number;
   /** the cases that may keep within it */
-  readonly cases: readonly { readonly one: FillCase; readonly bound: number }[];
-  readonly solved: Map<FillCase, Solved | null>;
+  readonly cases: readonly KnownCase[];
+  readonly solved: Map<KnownCase, Solved | null>;
   readonly ranked: Map<FillPreference | null, { weight: number; list: readonly Candidate[] }>;
 }
 
-/** Places in order of their least possible miss. */
-function inOrder(bounds: Uint16Array, below: number): number[] {
-  const buckets = new Map<number, number[]>();
-  bounds.forEach((bound, place) => {
-    if (bound >= below) return;
-    const bucket = buckets.get(bound);
-    if (bucket) bucket.push(place);
-    else buckets.set(bound, [place]);
+/** The cases that may keep within a miss, in order of the least that each can have. */
+function casesWithin(problem: FillProblem, count: number): BoundedCase[] {
+  const cases: BoundedCase[] = [];
+  someCase(problem, count, (lens, shutter, bound) => {
+    cases.push({ lens, shutter, bound });
+    return false;
   });
-  return [...buckets.keys()].sort((a, b) => a - b).flatMap((bound) => buckets.get(bound) ?? []);
+  return cases.sort((a, b) => a.bound - b.bound);
 }
 
-/** The least miss over all cases: only a case that may beat the best so far is worked out. */
-function leastMiss(problem: FillProblem, bounds: Uint16Array, atMost: number): number {
-  let best = atMost;
-  for (const place of inOrder(bounds, atMost)) {
-    const bound = bounds[place] ?? NOT_LOOKED_AT;
+/** The least miss of the cases; null where none keeps within `atMost`. Only a case that may be better is worked out. */
+function leastMiss(problem: FillProblem, cases: readonly BoundedCase[], atMost: number): number | null {
+  let best = atMost + 1;
+  for (const { lens, shutter, bound } of cases) {
     if (bound >= best) break;
-    const one = caseAt(problem, place);
+    const one = caseOf(problem, lens, shutter);
     if (!isWithin(one, best - 1)) continue;
     let [below, at] = [bound - 1, best - 1];
     while (at - below > 1) {
@@ -85,31 +100,35 @@ function leastMiss(problem: FillProblem, bounds: Uint16Array, atMost: number): n
     }
     best = at;
   }
-  return best;
+  return best > atMost ? null : best;
 }
 
-/**
- * Looks for the least miss. Cases whose background alone is off by more than a known recipe's miss can't be better,
- * so first those near the background's aim are looked at, then, where that is not enough, as many as may still be.
- */
+/** How much wider the search becomes when nothing was found. */
+const WIDER = 4;
+
+/** Looks for the least miss, first near the aim, then ever farther away. */
 export function startSearch(problem: FillProblem): FillSearch {
   const onAim = onAimCount(problem.grid);
-  let bounds = lowerBounds(problem, onAim);
-  let least = leastMiss(problem, bounds, NOT_LOOKED_AT);
-  if (least > onAim) {
-    bounds = lowerBounds(problem, Math.min(least, NOT_LOOKED_AT - 1));
-    least = leastMiss(problem, bounds, least);
+  let within = onAim;
+  let cases = casesWithin(problem, within);
+  let least = leastMiss(problem, cases, within);
+  while (least === null && within < ANY_COUNT) {
+    within = Math.min(ANY_COUNT, within * WIDER);
+    cases = casesWithin(problem, within);
+    least = leastMiss(problem, cases, within);
   }
-  const limit = Math.max(least, onAim);
-  const cases: { one: FillCase; bound: number }[] = [];
-  bounds.forEach((bound, place) => {
-    if (bound <= limit && bound !== NOT_LOOKED_AT) cases.push({ one: caseAt(problem, place), bound });
-  });
+  const limit = Math.max(least ?? 0, onAim);
   return {
     problem,
-    least: least === NOT_LOOKED_AT ? null : least,
+    least,
     limit,
-    cases,
+    cases: cases
+      .filter(({ bound }) => bound <= limit)
+      .map(({ lens, shutter, bound }) => ({
+        one: caseOf(problem, lens, shutter),
+        bound,
+        cost: caseCost(problem, lens, shutter),
+      })),
     solved: new Map(),
     ranked: new Map(),
   };
@@ -120,11 +139,9 @@ export function startSearch(problem: FillProblem): FillSearch {
  * @param flashCount what is allowed for front and rim where that is not the same
  */
 export function isReachable(problem: FillProblem, count: number, flashCount = count): boolean {
-  const bounds = lowerBounds(problem, count);
-  for (let place = 0; place < bounds.length; place++)
-    if ((bounds[place] ?? NOT_LOOKED_AT) <= count && isWithin(caseAt(problem, place), count, flashCount))
-      return true;
-  return false;
+  return someCase(problem, count, (lens, shutter) =>
+    isWithin(caseOf(problem, lens, shutter), count, flashCount),
+  );
 }
 
 function setFlashes(
@@ -145,18 +162,19 @@ function inRequestOrder(problem: FillProblem, used: readonly UsedFlash[]): UsedF
   return [...used].sort((a, b) => flashes.indexOf(a.flash) - flashes.indexOf(b.flash));
 }
 
-function solve({ problem, limit, solved }: FillSearch, one: FillCase): Solved | null {
-  const known = solved.get(one);
-  if (known !== undefined) return known;
+function solve({ problem, limit, solved }: FillSearch, known: KnownCase): Solved | null {
+  const before = solved.get(known);
+  if (before !== undefined) return before;
+  const { one } = known;
   const counts = one.backgroundCount > limit ? null : leastCounts(one, limit);
-  const result = counts === null ? null : solvedCase(problem, one, counts);
-  solved.set(one, result);
+  const result = counts === null ? null : solvedCase(problem, known, counts);
+  solved.set(known, result);
   return result;
 }
 
 function solvedCase(
   problem: FillProblem,
-  one: FillCase,
+  { one, cost }: KnownCase,
   counts: { front: number; rim: number },
 ): Solved | null {
   const { table } = one;
@@ -177,7 +195,7 @@ function solvedCase(
     sync,
     used,
   );
-  return { one, sync, used, outcome, count: missCount(problem, outcome) };
+  return { one, cost, sync, used, outcome, count: missCount(problem, outcome) };
 }
 
 function settingsAt({ grid }: FillProblem, { lens, shutter }: FillCase, position: number) {
@@ -204,23 +222,24 @@ export function isApart(stops: Found['stops'], from: readonly Found[], apartStop
 }
 
 interface Candidate {
-  readonly one: FillCase;
+  readonly known: KnownCase;
   readonly least: number;
 }
 
 /** Every case that may be given, with the least score that it can have, best first; made once for each wish. */
 function candidates(search: FillSearch, objective: FillObjective): readonly Candidate[] {
   const { problem, limit, least, cases, ranked } = search;
-  const known = ranked.get(objective.prefer);
-  if (known?.weight === objective.weight) return known.list;
-  const list = cases.map(({ one, bound }) => {
-    const { lens, shutter } = one;
-    const camera = Math.min(
-      cameraCost(problem, objective, lens, shutter, lens.widest),
-      cameraCost(problem, objective, lens, shutter, lens.smallest),
+  const before = ranked.get(objective.prefer);
+  if (before?.weight === objective.weight) return before.list;
+  const list = cases.map((known) => {
+    const { one, bound, cost } = known;
+    // The cost of a setting has no dip between its ends.
+    const setting = Math.min(
+      settingCost(problem.grid, objective, one.lens, one.lens.widest),
+      settingCost(problem.grid, objective, one.lens, one.lens.smallest),
     );
-    const cost = camera + leastOutcomeCost(one, objective, limit);
-    return { one, least: scoreOf(Math.max(bound, least ?? 0), cost) };
+    const beside = cost + setting + leastOutcomeCost(one, objective, limit);
+    return { known, least: scoreOf(Math.max(bound, least ?? 0), beside) };
   });
   list.sort((a, b) => a.least - b.least);
   ranked.set(objective.prefer, { weight: objective.weight, list });
@@ -231,16 +250,16 @@ function candidates(search: FillSearch, objective: FillObjective): readonly Cand
 function cheapestSetting(
   problem: FillProblem,
   objective: FillObjective,
-  { one, outcome, sync, count }: Solved,
+  { one, cost, outcome, sync, count }: Solved,
   taken: readonly Found[],
   apartStops: number,
 ): { position: number; score: number } | null {
   const { lens, shutter } = one;
-  const beside = outcomeCost(problem, objective, outcome, sync, shutter.mark.exact);
+  const beside = cost + outcomeCost(problem, objective, outcome, sync, shutter.mark.exact);
   let best: { position: number; score: number } | null = null;
   for (let position = lens.widest; position <= lens.smallest; position++) {
     if (!isApart(stopsAt(problem, one, position), taken, apartStops)) continue;
-    const score = scoreOf(count, cameraCost(problem, objective, lens, shutter, position) + beside);
+    const score = scoreOf(count, settingCost(problem.grid, objective, lens, position) + beside);
     if (best === null || score < best.score) best = { position, score };
   }
   return best;
@@ -265,9 +284,9 @@ export function bestFound(
 ): Found | null {
   const { problem } = search;
   let best: { solved: Solved; position: number; score: number } | null = null;
-  for (const { one, least } of candidates(search, objective)) {
+  for (const { known, least } of candidates(search, objective)) {
     if (best !== null && least >= best.score) break;
-    const solved = solve(search, one);
+    const solved = solve(search, known);
     const setting = solved && cheapestSetting(problem, objective, solved, taken, apartStops);
     if (solved && setting && (best === null || setting.score < best.score)) best = { solved, ...setting };
   }

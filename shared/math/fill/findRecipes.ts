@@ -1,11 +1,12 @@
 import { fillProblem } from './fillProblem';
 import {
   ALTERNATIVE_WEIGHT,
-  cameraCost,
+  caseCost,
   missCount,
   outcomeCost,
   OWN_WEIGHT,
   scoreOf,
+  settingCost,
   type FillObjective,
 } from './fillScore';
 import { bestFound, startSearch, type FillSearch, type Found } from './fillSearch';
@@ -48,7 +49,8 @@ function rescored({ problem }: FillSearch, own: FillObjective, { recipe, stops }
   const shutter = grid.shutters.find(({ mark }) => mark.exact === recipe.shutter.exact);
   if (lens === undefined || shutter === undefined) throw new RangeError('a recipe is none of its grid');
   const cost =
-    cameraCost(problem, own, lens, shutter, position) +
+    caseCost(problem, lens, shutter) +
+    settingCost(grid, own, lens, position) +
     outcomeCost(problem, own, recipe.outcome, recipe.sync, recipe.shutter.exact);
   return { ...recipe, score: scoreOf(missCount(problem, recipe.outcome), cost) };
 }

@@ -1,5 +1,5 @@
 import { assumedCurtainS } from '../highSpeedSync';
-import { fillProblem, NOT_LOOKED_AT, type FillProblem } from './fillProblem';
+import { ANY_COUNT, fillProblem, type FillProblem } from './fillProblem';
 import { isReachable, startSearch } from './fillSearch';
 import type { FillWish } from './fillTypes';
 import { bestOf, type LimitInTheWay } from './limitInTheWay';
@@ -18,8 +18,12 @@ const HALVINGS = 12;
 const LEAST_HELP = 6;
 
 /** The fewest steps by which a limit must move for a miss of so many parts to be kept; null where none are enough. */
-function fewestSteps({ mostSteps, isNested, movedBy }: MovableLimit, count: number): number | null {
-  const reaches = (steps: number) => isReachable(fillProblem(movedBy(steps)), count);
+function fewestSteps(
+  problem: FillProblem,
+  { mostSteps, isNested, movedBy, alone }: MovableLimit,
+  count: number,
+): number | null {
+  const reaches = (steps: number) => isReachable(fillProblem((alone ?? movedBy)(steps), problem), count);
   if (!isNested) {
     for (let steps = 1; steps <= mostSteps; steps++) if (reaches(steps)) return steps;
     return null;
@@ -34,25 +38,20 @@ function fewestSteps({ mostSteps, isNested, movedBy }: MovableLimit, count: numb
   return at;
 }
 
-function givenUp(
-  wish: FillWish,
-  movable: MovableLimit,
-  stepsAStop: number,
-  count: number,
-): LimitInTheWay | null {
-  const steps = fewestSteps(movable, count);
-  const best = steps === null ? null : bestOf(movable.movedBy(steps), wish.aim);
-  return steps === null || best === null
-    ? null
-    : { limit: movable.limit, shortByStops: steps / stepsAStop, ...best };
+function givenUp(problem: FillProblem, movable: MovableLimit, count: number): LimitInTheWay | null {
+  const steps = fewestSteps(problem, movable, count);
+  if (steps === null) return null;
+  const best = bestOf(fillProblem(movable.movedBy(steps), problem), problem.wish.aim);
+  return best && { limit: movable.limit, shortByStops: steps / problem.grid.steps, ...best };
 }
 
 /** How near (or far) flashes have to go, by halving; first for the aim itself, else for what still counts as on it. */
-function flashesGivenUp(wish: FillWish, limit: FlashLimit, count: number): LimitInTheWay | null {
+function flashesGivenUp(problem: FillProblem, limit: FlashLimit, count: number): LimitInTheWay | null {
+  const { wish } = problem;
   const mostStops = mostMovedStops(wish, limit);
   if (!hasFlashesFor(wish, limit) || mostStops === 0) return null;
   const reaches = (stops: number, flashCount: number) =>
-    isReachable(fillProblem(flashesMoved(wish, limit, stops)), count, flashCount);
+    isReachable(fillProblem(flashesMoved(wish, limit, stops), problem), count, flashCount);
   if (!reaches(mostStops, count)) return null;
   const flashCount = reaches(mostStops, 0) ? 0 : count;
   let [below, at] = [0, mostStops];
@@ -61,7 +60,7 @@ function flashesGivenUp(wish: FillWish, limit: FlashLimit, count: number): Limit
     if (reaches(middle, flashCount)) at = middle;
     else below = middle;
   }
-  const best = bestOf(flashesMoved(wish, limit, at), wish.aim);
+  const best = bestOf(fillProblem(flashesMoved(wish, limit, at), problem), wish.aim);
   return best && { limit, shortByStops: movedStops(wish, limit, best.recipe), ...best };
 }
 
@@ -75,15 +74,16 @@ const FLASH_LIMITS: readonly FlashLimit[] = [
 ];
 
 /** High-speed sync where the camera has none: by how many stops the recipe's shutter is over the sync speed. */
-function highSpeedSyncGivenUp(wish: FillWish, count: number): LimitInTheWay | null {
+function highSpeedSyncGivenUp(problem: FillProblem, count: number): LimitInTheWay | null {
+  const { wish } = problem;
   const { highSpeedSync, syncSpeedS } = wish.camera;
   if (highSpeedSync !== null) return null;
   const camera = {
     ...wish.camera,
     highSpeedSync: { curtainS: assumedCurtainS(syncSpeedS), extraLossStops: 0 },
   };
-  const able = { ...wish, camera };
-  const best = isReachable(fillProblem(able), count) ? bestOf(able, wish.aim) : null;
+  const able = fillProblem({ ...wish, camera }, problem);
+  const best = isReachable(able, count) ? bestOf(able, wish.aim) : null;
   return (
     best && {
       limit: 'high_speed_sync',
@@ -95,34 +95,34 @@ function highSpeedSyncGivenUp(wish: FillWish, count: number): LimitInTheWay | nu
 
 /** Every limit of the gear that alone, given up, lets a miss of so many parts be kept. */
 export function gearGivenUp(problem: FillProblem, count: number): (LimitInTheWay | null)[] {
-  const { wish, grid } = problem;
-  const ofFlashes = FLASH_LIMITS.map((limit) => flashesGivenUp(wish, limit, count));
+  const { wish } = problem;
+  const ofFlashes = FLASH_LIMITS.map((limit) => flashesGivenUp(problem, limit, count));
   const isOneEnough = ofFlashes.some((one) => one?.limit === 'key_power' || one?.limit === 'fill_power');
   return [
-    ...movableLimits(wish).map((movable) => givenUp(wish, movable, grid.steps, count)),
-    highSpeedSyncGivenUp(wish, count),
+    ...movableLimits(wish).map((movable) => givenUp(problem, movable, count)),
+    highSpeedSyncGivenUp(problem, count),
     ...ofFlashes,
-    isOneEnough ? null : flashesGivenUp(wish, 'front_power', count),
+    isOneEnough ? null : flashesGivenUp(problem, 'front_power', count),
   ];
 }
 
 /** Every limit of the gear that, given up, brings the best recipe nearer to the aim, though not onto it. */
 export function gearThatHelps(problem: FillProblem, least: number | null): (LimitInTheWay | null)[] {
-  const { wish, grid } = problem;
-  const helpful = (changedWish: FillWish) => {
-    const most = least === null ? NOT_LOOKED_AT - 1 : least - LEAST_HELP;
-    if (most < 0 || !isReachable(fillProblem(changedWish), most)) return null;
-    return startSearch(fillProblem(changedWish)).least;
+  const { wish } = problem;
+  const most = least === null ? ANY_COUNT : least - LEAST_HELP;
+  const helpful = (changed: FillWish) => {
+    const other = fillProblem(changed, problem);
+    return most >= 0 && isReachable(other, most) ? startSearch(other).least : null;
   };
   const cameras = movableLimits(wish)
     .filter(({ isNested, mostSteps }) => isNested && mostSteps > 0)
     .map((movable) => {
       const count = helpful(movable.movedBy(movable.mostSteps));
-      return count === null ? null : givenUp(wish, movable, grid.steps, count);
+      return count === null ? null : givenUp(problem, movable, count);
     });
   const flashes = FLASH_LIMITS.filter((limit) => hasFlashesFor(wish, limit)).map((limit) => {
     const count = helpful(flashesMoved(wish, limit, mostMovedStops(wish, limit)));
-    return count === null ? null : flashesGivenUp(wish, limit, count);
+    return count === null ? null : flashesGivenUp(problem, limit, count);
   });
   return [...cameras, ...flashes];
 }

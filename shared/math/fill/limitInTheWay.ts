@@ -1,5 +1,5 @@
 import { fillOutcome } from './fillOutcome';
-import { fillProblem } from './fillProblem';
+import type { FillProblem } from './fillProblem';
 import { largestMiss, onAimCount, OWN_WEIGHT } from './fillScore';
 import { bestFound, startSearch } from './fillSearch';
 import { exactSettingsOf, type FillAim, type FillRecipe, type FillWish } from './fillTypes';
@@ -34,8 +34,11 @@ export interface LimitInTheWay {
 const own = (wish: FillWish) => ({ prefer: wish.prefer, weight: OWN_WEIGHT });
 
 /** The best recipe of a changed request, with its outcome held against the aim of the original one. */
-export function bestOf(changed: FillWish, aim: FillAim): { recipe: FillRecipe; leavesStops: number } | null {
-  const problem = fillProblem(changed);
+export function bestOf(
+  problem: FillProblem,
+  aim: FillAim,
+): { recipe: FillRecipe; leavesStops: number } | null {
+  const changed = problem.wish;
   const search = startSearch(problem);
   const found = search.least === null ? null : bestFound(search, own(changed));
   if (found === null) return null;

@@ -35,6 +35,8 @@ export interface MovableLimit {
   /** more steps allow everything that fewer allow */
   readonly isNested: boolean;
   readonly movedBy: (steps: number) => FillWish;
+  /** the same with nothing but what is new, where the rest is known not to be enough */
+  readonly alone?: (steps: number) => FillWish;
 }
 
 const withCamera = (wish: FillWish, camera: Partial<FillCamera>): FillWish => ({
@@ -84,7 +86,8 @@ function syncLimit(wish: FillWish): MovableLimit {
 function filterLimit(wish: FillWish): MovableLimit {
   const steps = stepsPerStop(wish.camera.scale);
   const movedBy = (count: number) => withCamera(wish, { ndStops: [...wish.camera.ndStops, count / steps] });
-  return { limit: 'nd_stops', mostSteps: STRONGEST_FILTER_STOPS * steps, isNested: false, movedBy };
+  const alone = (count: number) => withCamera(wish, { ndStops: [count / steps] });
+  return { limit: 'nd_stops', mostSteps: STRONGEST_FILTER_STOPS * steps, isNested: false, movedBy, alone };
 }
 
 /** The limits of a request's camera, each as something that could be moved. */

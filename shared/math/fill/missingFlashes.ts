@@ -1,5 +1,5 @@
 import { countOf } from './fillMisses';
-import { caseAt, lowerBounds, NOT_LOOKED_AT, type FillProblem } from './fillProblem';
+import { caseOf, someNearBackground, type FillProblem } from './fillProblem';
 import { onAimCount } from './fillScore';
 import type { FillLimit, LimitInTheWay } from './limitInTheWay';
 
@@ -20,18 +20,20 @@ export function missingFlashes(problem: FillProblem): LimitInTheWay[] {
 
 /** What a flash has to bring where there is none and ambient light leaves the subject too dark; null where it does not. */
 function lightNeeded(problem: FillProblem): Pick<LimitInTheWay, 'shortByStops' | 'guideNumberPerM'> | null {
-  const count = onAimCount(problem.grid);
-  const bounds = lowerBounds(problem, count);
   let best: { shortByStops: number; guideNumberPerM: number } | null = null;
-  for (let place = 0; place < bounds.length; place++) {
-    if ((bounds[place] ?? NOT_LOOKED_AT) === NOT_LOOKED_AT) continue;
-    const { front, shutter, backgroundCount } = caseAt(problem, place);
+  let isNeeded = true;
+  const count = onAimCount(problem.grid);
+  someNearBackground(problem, count, (lens, shutter) => {
+    const { front } = caseOf(problem, lens, shutter);
     const missing = front.wished - front.ambient;
-    if (backgroundCount > count || shutter.sync !== 'normal' || !(missing > 0)) continue;
+    if (shutter.sync !== 'normal') return false;
     const shortByStops = Math.log2(front.wished / front.ambient);
-    if (countOf(shortByStops) <= count) return null;
+    isNeeded = shortByStops > 0 && countOf(shortByStops) > count;
     const guideNumberPerM = Math.sqrt(missing);
-    if (best === null || guideNumberPerM < best.guideNumberPerM) best = { shortByStops, guideNumberPerM };
-  }
+    if (isNeeded && (best === null || guideNumberPerM < best.guideNumberPerM))
+      best = { shortByStops, guideNumberPerM };
+    return !isNeeded;
+  });
+  if (!isNeeded) return null;
   return best;
 }
