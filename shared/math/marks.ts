@@ -139,10 +139,9 @@ export function nearestMark(
 ): Mark {
   const position = positionOf(kind, scale, inDomain(kind, exact, SMALLEST, ANY));
   if (kind === 'shutter' && exact > SLOWEST_MARKED_S) return secondsMark(scale, exact, rounding);
-  const room = ON_POSITION * Math.max(1, Math.abs(position));
   const whole = Math.round(position);
-  if (Math.abs(position - whole) < room) return markAt(kind, scale, whole);
-  if (rounding === 'nearest') return markAt(kind, scale, Math.floor(position + 0.5 + room));
+  if (Math.abs(position - whole) < ON_POSITION) return markAt(kind, scale, whole);
+  if (rounding === 'nearest') return markAt(kind, scale, Math.floor(position + 0.5 + ON_POSITION));
   return markAt(kind, scale, rounding === 'ceil' ? Math.ceil(position) : Math.floor(position));
 }
 

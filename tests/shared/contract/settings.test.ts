@@ -7,6 +7,7 @@ import { exactOf, exactSettings, type Reading } from '../../../shared/contract/s
 import { settingsWithMarks } from '../../../shared/contract/settingsWithMarks';
 import { markAt, nearestMark, residualStops, type Scale } from '../../../shared/math/marks';
 import { powerMarkAt } from '../../../shared/math/powerMarks';
+import { evenly } from '../../support/spread';
 
 const SCALES: Scale[] = ['full', 'half', 'third'];
 const reading = (scale: Scale = 'third', readAs: Reading['readAs'] = 'mark'): Reading => ({ scale, readAs });
@@ -224,7 +225,7 @@ describe('a setting in an answer', () => {
       fc.property(
         fc.constantFrom(...kinds),
         fc.constantFrom(...SCALES),
-        fc.double({ min: 0, max: 1, noNaN: true }),
+        evenly(0, 1),
         (kind, scale, share) => {
           const [low, high] = SETTING_RANGES[kind];
           const exact = low * (high / low) ** share;

@@ -10,6 +10,7 @@ import {
 } from '../../../shared/math/equivalents';
 import { sceneEv100 } from '../../../shared/math/exposure';
 import { exactAt, markAt, nearestMark, stepsPerStop, type Scale } from '../../../shared/math/marks';
+import { inRatio } from '../../support/spread';
 
 const WHOLE: SettingLimits = {
   apertureMin: 0.5,
@@ -21,10 +22,6 @@ const WHOLE: SettingLimits = {
 };
 
 const anyScale = fc.constantFrom<Scale>('full', 'half', 'third');
-const inRatio = (low: number, high: number) =>
-  fc
-    .double({ min: Math.log2(low), max: Math.log2(high), noNaN: true })
-    .map((n) => Math.min(high, Math.max(low, 2 ** n)));
 /** Limits of one kind; every other time they leave all of it, so that there are rows to look at. */
 const range = (low: number, high: number) =>
   fc.oneof(

@@ -19,6 +19,7 @@ import isoThird from '../../reference/iso-marks-third.json';
 import shutterHalf from '../../reference/shutter-marks-half.json';
 import shutterThird from '../../reference/shutter-marks-third.json';
 import { eachRow } from '../../support/eachRow';
+import { inRatio } from '../../support/spread';
 import { within } from '../../support/within';
 
 const KINDS: MarkedKind[] = ['aperture', 'shutter', 'iso'];
@@ -34,12 +35,7 @@ const digits = (label: string) => numberOfLabel(label.replace(/^f\//, '').replac
 
 const anyKind = fc.constantFrom(...KINDS);
 const anyScale = fc.constantFrom(...SCALES);
-const anyExact = (kind: MarkedKind) => {
-  const [low, high] = RANGES[kind];
-  return fc
-    .double({ min: Math.log2(low), max: Math.log2(high), noNaN: true })
-    .map((n) => Math.min(high, Math.max(low, 2 ** n)));
-};
+const anyExact = (kind: MarkedKind) => inRatio(...RANGES[kind]);
 const anySetting = fc
   .tuple(anyKind, anyScale)
   .chain(([kind, scale]) => fc.tuple(fc.constant(kind), fc.constant(scale), anyExact(kind)));

@@ -2,10 +2,11 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { residualStops, stepsPerStop, type Scale } from '../../../shared/math/marks';
 import { nearestPowerMark, powerMarkAt, powerOfText } from '../../../shared/math/powerMarks';
+import { inRatio } from '../../support/spread';
 
 const SCALES: Scale[] = ['full', 'half', 'third'];
 const anyScale = fc.constantFrom(...SCALES);
-const anyPower = fc.double({ min: -30, max: 0, noNaN: true }).map((stops) => 2 ** stops);
+const anyPower = inRatio(2 ** -30, 1);
 
 describe('marks of power', () => {
   it('count down from full by the steps of the scale, named as a part of full and what is over it', () => {
