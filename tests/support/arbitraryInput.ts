@@ -2,40 +2,40 @@ import fc from 'fast-check';
 import type { Field } from '../../shared/contract/field';
 import { markAt } from '../../shared/math/marks';
 import { powerMarkAt } from '../../shared/math/powerMarks';
+import { evenly, inRatio } from './spread';
 
-/** Numbers spread over their whole range, in ratio where the range spans decades, with both ends included. */
+/** Numbers spread over their whole range, evenly, in ratio and over all doubles, with both ends included. */
 function numberWithin(field: Field): fc.Arbitrary<number> {
   const low = field.minimum ?? -1e6;
   const high = field.maximum ?? 1e6;
   if (field.isInteger) return fc.integer({ min: low, max: high });
-  // JSON and queries know no negative zero.
-  const plain = fc
-    .double({ min: low, max: high, minExcluded: field.minimumIsExcluded, noNaN: true })
-    .map((n) => n + 0);
-  if (low < 0) return plain;
-  const floor = Math.max(low, high * 1e-12, 1e-12);
-  const inRatio = fc
-    .double({ min: Math.log(floor), max: Math.log(high), noNaN: true })
-    .map((n) => Math.min(high, Math.max(floor, Math.exp(n))));
-  return fc.oneof(inRatio, plain);
+  const doubles = fc.double({ min: low, max: high, minExcluded: field.minimumIsExcluded, noNaN: true });
+  const positive = inRatio(Math.max(low, high * 1e-12, 1e-12), high);
+  return (
+    fc
+      .oneof(doubles, evenly(low, high), low < 0 ? doubles : positive)
+      // JSON and queries know no negative zero.
+      .map((n) => n + 0)
+      .filter((n) => !(field.minimumIsExcluded && n === low))
+  );
 }
 
 const SETTINGS = {
   aperture: fc.oneof(
     fc.integer({ min: -6, max: 48 }).map((p) => markAt('aperture', 'third', p).label),
-    fc.double({ min: 0.5, max: 256, noNaN: true }),
+    inRatio(0.5, 256),
   ),
   shutter: fc.oneof(
     fc.integer({ min: -15, max: 50 }).map((p) => markAt('shutter', 'third', p).label),
-    fc.double({ min: Math.log(1e-6), max: Math.log(86_400), noNaN: true }).map(Math.exp),
+    inRatio(1e-6, 86_400),
   ),
   iso: fc.oneof(
     fc.integer({ min: -15, max: 45 }).map((p) => Number(markAt('iso', 'third', p).label)),
-    fc.double({ min: Math.log(1), max: Math.log(1e7), noNaN: true }).map((n) => Math.min(1e7, Math.exp(n))),
+    inRatio(1, 1e7),
   ),
   power: fc.oneof(
     fc.integer({ min: 0, max: 27 }).map((p) => powerMarkAt('third', p).label),
-    fc.double({ min: 1e-6, max: 1, noNaN: true }),
+    inRatio(1e-6, 1),
   ),
 };
 
