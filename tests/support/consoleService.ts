@@ -144,8 +144,9 @@ export async function startConsole(
       email = newAddress(),
     } = {}): Promise<Person> => {
       const browser = newBrowser();
+      const before = mail.to(email).length;
       await browser.call('POST', '/api/sign-up', { email, name, password: PASSWORD, roles });
-      const { token } = await mail.next(email);
+      const { token } = await mail.next(email, before);
       await browser.call('POST', '/api/sign-up/confirm', { token });
       const answer = await browser.signIn(email);
       if (answer.status !== 200) throw new Error(`signing in failed: ${answer.text}`);
