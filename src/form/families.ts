@@ -2,12 +2,15 @@ import { checkParamsOf, type Schema } from './schemaNode';
 
 /**
  * Fields of one object that belong together: `solve` when all but one are given and the one left empty is the
- * answer, `alternatives` when one of them says the thing, `optional` when at most one does.
+ * answer, `alternatives` when the thing is said in one of several ways, `optional` when it may be left out as well.
  */
 export interface Family {
   readonly kind: 'solve' | 'alternatives' | 'optional';
   readonly names: readonly string[];
-  /** What is given or left empty as one: mostly a single field, or several ways to say the same. */
+  /**
+   * Of `solve`: what is given or left empty as one, mostly a single field, or several ways to say the same. Of the
+   * others: the ways, each with the fields that it takes together.
+   */
   readonly slots: readonly (readonly string[])[];
 }
 
@@ -36,26 +39,64 @@ function slotsOf(fields: readonly string[], rules: readonly Rule[]): string[][] 
   });
 }
 
-function familyOf({ fault, count, fields }: Rule, rules: readonly Rule[]): Family[] {
-  const single = fields.map((name) => [name]);
-  if (fault === 'at_most_one') return [{ kind: 'optional', names: fields, slots: single }];
-  const slots = slotsOf(fields, rules);
-  if (count > 1 && count === slots.length - 1) return [{ kind: 'solve', names: fields, slots }];
-  return count === 1 ? [{ kind: 'alternatives', names: fields, slots: single }] : [];
+/** The sets of fields that meet every "exactly one of" once: a field may stand in several, as a ratio does for both its parts. */
+function waysOf(rules: readonly Rule[]): string[][] {
+  const [rule, ...others] = rules;
+  if (!rule) return [[]];
+  return rule.fields.flatMap((name) => {
+    const left = others.filter(({ fields }) => !fields.includes(name));
+    const taken = rules.filter((one) => one.fields.includes(name)).flatMap(({ fields }) => fields);
+    const open = left.map((one) => ({
+      ...one,
+      fields: one.fields.filter((field) => !taken.includes(field)),
+    }));
+    return waysOf(open).map((way) => [name, ...way]);
+  });
 }
 
-/** The families among an object's fields, as its schema's checks describe them; none lies inside another. */
+function solveFamilies(rules: readonly Rule[]): Family[] {
+  return rules.flatMap(({ fault, count, fields }) => {
+    const slots = slotsOf(fields, rules);
+    const isOneLess = fault === 'exactly' && count > 1 && count === slots.length - 1;
+    return isOneLess ? [{ kind: 'solve' as const, names: fields, slots }] : [];
+  });
+}
+
+/** Rules that share a field say one thing between them. */
+function joined(rules: readonly Rule[]): Rule[][] {
+  const sets: Rule[][] = [];
+  for (const rule of rules) {
+    const touching = sets.filter((set) =>
+      set.some(({ fields }) => fields.some((name) => rule.fields.includes(name))),
+    );
+    for (const set of touching) sets.splice(sets.indexOf(set), 1);
+    sets.push([...touching.flat(), rule]);
+  }
+  return sets;
+}
+
+function alternativeFamilies(rules: readonly Rule[]): Family[] {
+  const exact = rules.filter(({ fault, count }) => fault === 'exactly' && count === 1);
+  return joined(exact).map((set) => ({
+    kind: 'alternatives',
+    names: [...new Set(set.flatMap(({ fields }) => fields))],
+    slots: waysOf(set),
+  }));
+}
+
+function optionalFamilies(rules: readonly Rule[]): Family[] {
+  return rules
+    .filter(({ fault }) => fault === 'at_most_one')
+    .map(({ fields }) => ({ kind: 'optional', names: fields, slots: fields.map((name) => [name]) }));
+}
+
+/** The families among an object's fields, as its schema's checks describe them; a field stands in the first that has it. */
 export function familiesOf(schema: Schema): Family[] {
   const rules = checkParamsOf(schema).filter(isRule);
-  const families = rules.flatMap((rule) => familyOf(rule, rules));
-  const isInside = (one: Family) =>
-    families.some(
-      (other) =>
-        other !== one &&
-        other.names.length > one.names.length &&
-        one.names.every((n) => other.names.includes(n)),
-    );
-  return families.filter((family) => !isInside(family));
+  const all = [...solveFamilies(rules), ...alternativeFamilies(rules), ...optionalFamilies(rules)];
+  return all.filter(
+    ({ names }, i) => !all.slice(0, i).some((earlier) => earlier.names.some((name) => names.includes(name))),
+  );
 }
 
 /** What stands in a form: single fields, and families at the place of their first member. */
