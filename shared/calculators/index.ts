@@ -30,6 +30,8 @@ export const calculatorList: readonly CalculatorEntry[] = [
   { id: 'flash/motion', title: 'Motion, ghost and shake', load: async () => (await import('./flash/motion')).flashMotion },
   { id: 'flash/daylight', title: 'Wide aperture in daylight', load: async () => (await import('./flash/daylight')).flashDaylight },
   { id: 'flash/budget', title: 'Battery and recycling', load: async () => (await import('./flash/budget')).flashBudget },
+  { id: 'fill/recipes', title: 'Recipes for flash and ambient light', load: async () => (await import('./fill/recipes')).fillRecipes },
+  { id: 'fill/check', title: 'Outcome of given settings', load: async () => (await import('./fill/check')).fillCheck },
 ];
 
 /** Loads every calculator, in the list's order. */

@@ -1,4 +1,4 @@
-import { cautions } from './en/cautions';
+import type { cautions } from './en/cautions';
 import { contradictions } from './en/contradictions';
 import { notes } from './en/notes';
 
@@ -6,6 +6,8 @@ export { faults, rules, wanted } from './en/faults';
 export { account } from './en/account';
 export { cautions } from './en/cautions';
 export { costs } from './en/costs';
+export { fillLimits, fillSides, type LimitParams } from './en/fillLimits';
+export { fillTrades } from './en/fillTrades';
 export { mails } from './en/mails';
 export { problems } from './en/problems';
 

@@ -1,4 +1,5 @@
 import type { CameraGrid, GridLens, GridShutter } from './cameraGrid';
+import { stepsPerStop, type Scale } from '../marks';
 import { countOf, mostAt, sizesOf } from './fillMisses';
 import { handheldOf } from './fillOutcome';
 import type { FillCase, FillProblem } from './fillProblem';
@@ -41,6 +42,8 @@ const GHOST_LEVELS = { none: 0, faint: 1, clear: 2, dominant: 3 } as const;
 
 /** Half of the scale's step, stops: what still counts as on the aim. */
 export const halfStep = (grid: Pick<CameraGrid, 'steps'>): number => 0.5 / grid.steps;
+/** The most by which a part may miss and still count as on the aim, with room for rounding. */
+export const onAimStops = (scale: Scale): number => halfStep({ steps: stepsPerStop(scale) }) + 1e-8;
 /** The same in whole parts of 1/120 stop. */
 export const onAimCount = (grid: Pick<CameraGrid, 'steps'>): number => countOf(halfStep(grid));
 

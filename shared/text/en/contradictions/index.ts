@@ -1,4 +1,5 @@
 import { exposureContradictions } from './exposure';
+import { fillContradictions } from './fill';
 import { filtersContradictions } from './filters';
 import { flashContradictions } from './flash';
 import { lightContradictions } from './light';
@@ -9,4 +10,5 @@ export const contradictions = {
   ...lightContradictions,
   ...filtersContradictions,
   ...flashContradictions,
+  ...fillContradictions,
 } as const;

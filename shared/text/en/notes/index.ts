@@ -1,7 +1,14 @@
 import { exposureNotes } from './exposure';
+import { fillNotes } from './fill';
 import { filtersNotes } from './filters';
 import { flashNotes } from './flash';
 import { lightNotes } from './light';
 
 /** Sentences for notes, by code. One file a calculator group; a code stands in one of them only. */
-export const notes = { ...exposureNotes, ...lightNotes, ...filtersNotes, ...flashNotes } as const;
+export const notes = {
+  ...exposureNotes,
+  ...lightNotes,
+  ...filtersNotes,
+  ...flashNotes,
+  ...fillNotes,
+} as const;
