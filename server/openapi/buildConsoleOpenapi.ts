@@ -26,7 +26,7 @@ const OWN_HEADERS: Record<string, object> = {
 /** Problems that any request can get. */
 function statusesOf(route: Route): number[] {
   const changes = route.method !== 'GET';
-  const common = [400, 405, 422, 429, 500, 503, ...(changes ? [403, 413, 415] : [])];
+  const common = [400, 422, 429, 500, 503, ...(changes ? [403, 413, 415] : [])];
   const closed = route.access === 'session' ? [401, 403] : [];
   return [...new Set([...common, ...closed, ...route.problems])].sort((a, b) => a - b);
 }

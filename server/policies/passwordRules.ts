@@ -18,7 +18,7 @@ export function normalPassword(password: string): string {
 }
 
 /** The spelling under which blocklists are kept. */
-export function foldPassword(password: string): string {
+function foldPassword(password: string): string {
   return normalPassword(password).toLowerCase();
 }
 

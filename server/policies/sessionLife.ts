@@ -5,7 +5,7 @@ export const ABSOLUTE_DAYS = 30;
 /** How long an access token holds before it has to be refreshed. */
 export const ACCESS_S = 5 * 60;
 /** A refresh token that was used may come once more within this time: two tabs that refresh at once. */
-export const GRACE_S = 10;
+const GRACE_S = 10;
 
 export interface RefreshFacts {
   /** Seconds since the token was used; null for one that was not. */

@@ -15,7 +15,7 @@ afterAll(() => contract.leave());
 export const PASSWORD = 'seven lanterns on the upper terrace';
 
 /** The headers that a page of the console sends with what changes something. */
-export const OWN_PAGE = {
+const OWN_PAGE = {
   'Sec-Fetch-Site': 'same-origin',
   'X-Evenfall-Console': '1',
   'Content-Type': 'application/json',

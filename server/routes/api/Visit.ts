@@ -16,7 +16,7 @@ const COOKIE_S = ABSOLUTE_DAYS * 86_400;
 const IPV6_PLACE = 56;
 
 /** The names of the two cookies; browsers hold the prefixed ones to their rules, which need https. */
-export function cookieNames(publicUrl: string): { access: string; refresh: string; isSecure: boolean } {
+function cookieNames(publicUrl: string): { access: string; refresh: string; isSecure: boolean } {
   const isSecure = publicUrl.startsWith('https:');
   return {
     access: `${isSecure ? '__Host-' : ''}evenfall_session`,
@@ -26,7 +26,7 @@ export function cookieNames(publicUrl: string): { access: string; refresh: strin
 }
 
 /** What throttles take for one place. */
-export function addressGroupOf(address: string): string {
+function addressGroupOf(address: string): string {
   return ipKeyGenerator(address, IPV6_PLACE);
 }
 

@@ -1,5 +1,5 @@
 import type { z } from 'zod';
-import type { ConsoleServices, Origin } from '../../services/console/ConsoleServices';
+import type { ConsoleServices } from '../../services/console/ConsoleServices';
 import type { SignedIn } from '../../services/sessions/liveSession';
 import type { Visit } from './Visit';
 
@@ -77,4 +77,4 @@ export function closedRoute<P extends Shape = Shape, Q extends Shape = Shape, B 
   return { ...route, access: 'session' } as unknown as Route;
 }
 
-export type { ConsoleServices, Origin };
+export type { ConsoleServices };
