@@ -84,7 +84,7 @@ export function decodeQuery(pairs: QueryPairs, fields: readonly Field[]): Record
  */
 export function encodeQuery(input: unknown, prefix = ''): [string, string][] {
   if (input === undefined || input === null) return [];
-  if (typeof input !== 'object') return [[prefix, String(input)]];
+  if (typeof input !== 'object') return [[prefix, String(input as string | number | boolean)]];
   return Object.entries(input).flatMap(([key, value]) =>
     encodeQuery(value, prefix === '' ? key : `${prefix}.${key}`),
   );

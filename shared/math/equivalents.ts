@@ -82,7 +82,7 @@ export function equivalentRows(
   limits: SettingLimits,
   keep: KeptSetting | null,
 ): EquivalentRow[] {
-  for (const [name, limit] of Object.entries(limits)) inDomain(name, limit, SMALLEST, ANY);
+  for (const [name, limit] of Object.entries<number>({ ...limits })) inDomain(name, limit, SMALLEST, ANY);
   const apertures = positionsWithin('aperture', scale, limits.apertureMin, limits.apertureMax);
   const isos = positionsWithin('iso', scale, limits.isoMin, limits.isoMax);
   const fastest = positionOf('shutter', scale, limits.shutterFastestS) + EDGE;

@@ -33,6 +33,13 @@ export function withUnit(number: string, unit?: string): string {
   return `${number} ${isOne && unit === 'stops' ? 'stop' : unit}`;
 }
 
+/** A time in seconds, as a fraction where a person would say it so: "1/250 s", "0.0043 s", "2 s". */
+export function seconds(value: number): string {
+  const under = Math.round(1 / value);
+  const isFraction = value > 0 && value < 0.3 && Math.abs(under * value - 1) < 1e-6;
+  return isFraction ? `1/${under} s` : amount(value, 's');
+}
+
 /** Stops with sign and one or two decimals: "+1.5", "−0.33"; plain "0" where nothing is left of them. */
 export function signedStops(value: number): string {
   const text = Number(Math.abs(value).toFixed(2)).toString();

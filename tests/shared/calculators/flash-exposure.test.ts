@@ -144,7 +144,7 @@ describe('flash/exposure in high-speed sync', () => {
     expect(places(withCurtain(1 / 250))).toEqual([]);
     expect(places(withCurtain(0.00401))).toEqual(['/highSpeedSync/curtainS curtain_slower_than_sync']);
     const [fault] = faultsIn(flashExposure, withCurtain(0.00401));
-    expect(fault?.detail).toMatch(/0\.004 s.*0\.00401 s/);
+    expect(fault?.detail).toMatch(/1\/250 s.*0\.00401 s/);
   });
 });
 

@@ -6,6 +6,7 @@ import {
   listed,
   quoted,
   readable,
+  seconds,
   shortened,
   signedStops,
 } from '../../../shared/text/en/format';
@@ -50,6 +51,20 @@ describe('numbers for people', () => {
     expect(amount(7)).toBe('7');
     expect(counted(1, 'item')).toBe('1 item');
     expect(counted(1000, 'item')).toBe('1,000 items');
+  });
+
+  it('as times are fractions where a person would say so', () => {
+    const cases: [number, string][] = [
+      [0.004, '1/250 s'],
+      [1 / 256, '1/256 s'],
+      [1 / 300, '1/300 s'],
+      [0.0043, '0.0043 s'],
+      [0.5, '0.5 s'],
+      [2, '2 s'],
+      [0, '0 s'],
+      [-0.004, '−0.004 s'],
+    ];
+    for (const [value, text] of cases) expect(seconds(value), String(value)).toBe(text);
   });
 
   it('as stops have a sign, and none where nothing is left', () => {

@@ -14,7 +14,7 @@ export const exposureNotes = {
   iso_outside_usual_gear: (p: { mark: string }) =>
     `ISO ${p.mark} lies outside usual cameras (50 to 102,400); choose another aperture or shutter.`,
   usual_gear_limits: () =>
-    'Where no limit was given, that of usual gear holds, widened to your own settings: f/1 to f/32, 1/8000 to 30s, ISO 50 to 102,400.',
+    'Limits that were not given are those of usual gear, f/1 to f/32, 1/8000 to 30s and ISO 50 to 102,400, widened to your own settings.',
   exposure_moved_to_step: (p: { stops: number }) =>
     `The exposure does not fall on marks of this scale; the rows give the nearest that does, ${amount(Number(Math.abs(p.stops).toPrecision(2)), 'stops')} ${p.stops < 0 ? 'darker' : 'brighter'}.`,
   no_equivalents: () =>
@@ -32,7 +32,7 @@ export const exposureNotes = {
   handheld_rule_of_thumb: () =>
     'A rule of thumb for hands that turn by 1.7° a second, and for a print looked at as a whole; it says nothing about a subject that moves. For sharp single pixels take a fifth of the time.',
   stabilisation_as_claimed: (p: { stops: number }) =>
-    `Stabilisation is counted as claimed, ${readable(p.stops)} stops; close up and with long lenses it gains less.`,
+    `Stabilisation is counted as claimed, ${amount(p.stops, 'stops')}; close up and with long lenses it gains less.`,
   circle_assumed: (p: { circleUm: number }) =>
     `Neither a circle of confusion nor a sensor was given; ${readable(p.circleUm)} µm was used, for 36 × 24 mm.`,
   background_at_infinity: () =>
