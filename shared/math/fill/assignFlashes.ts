@@ -38,11 +38,12 @@ function boundsFor({ ambient, wished, ratio, isNeeded }: FlashTask, missStops: n
     };
   const factor = 2 ** missStops;
   const free = ratio === null || isAbsentAllowed;
+  // Each bound is wider by its own rounding, since lights may differ by any number of stops.
   return {
-    sumLow: wished / factor - ambient,
-    sumHigh: wished * factor - ambient,
-    ratioLow: free ? 0 : Math.max(0, ratio / factor - 1),
-    ratioHigh: free ? Infinity : ratio * factor - 1,
+    sumLow: wished * (1 / factor - SAME_LIGHT) - ambient,
+    sumHigh: wished * factor * (1 + SAME_LIGHT) - ambient,
+    ratioLow: free ? 0 : Math.max(0, (ratio / factor) * (1 - SAME_LIGHT) - 1),
+    ratioHigh: free ? Infinity : ratio * factor * (1 + SAME_LIGHT) - 1,
     needsKey: isNeeded || !free,
     needsFill: !free,
   };
@@ -57,8 +58,7 @@ function fillBetween(b: Bounds, k1: number, k2: number, l1: number, l2: number):
 
 function isPossible(b: Bounds, k1: number, k2: number, l1: number, l2: number): boolean {
   const [low, high] = fillBetween(b, k1, k2, l1, l2);
-  // Room for rounding goes by the larger of the sums in play.
-  return low <= high + SAME_LIGHT * Math.max(b.sumHigh === Infinity ? 0 : b.sumHigh, k2, l2);
+  return low <= high;
 }
 
 /** Which power each flash has, by its place in `powers`. */
@@ -97,7 +97,7 @@ export function assignWithin(
       const [lo, hi] = [low[level] ?? 0, high[level] ?? 0];
       const [k, kk] = isFill ? [k1, k2] : [k1 + lo, k2 + hi];
       const [l, ll] = isFill ? [l1 + lo, l2 + hi] : [l1, l2];
-      if (k + l > b.sumHigh * (1 + SAME_LIGHT)) break;
+      if (k + l > b.sumHigh) break;
       if (!isPossible(b, k, kk + moreKey, l, ll + moreFill)) continue;
       chosen[i] = level;
       if (go(i + 1, level === 0 ? used : used + 1, k, kk, l, ll)) return true;
