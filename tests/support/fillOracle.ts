@@ -1,7 +1,7 @@
 import { clippedBy, flashPulse } from '../../shared/math/flashDuration';
 import type { ExactSettings } from '../../shared/math/exposure';
 import type { FillFlash, FillWish, SyncKind, UsedFlash } from '../../shared/math/fill/fillTypes';
-import { markAt, type MarkedKind } from '../../shared/math/marks';
+import { markAt, type MarkedKind, type Scale } from '../../shared/math/marks';
 
 /**
  * Goes through every combination of marks, filters and powers of a request, and nothing cleverer: the oracle for the
@@ -10,14 +10,22 @@ import { markAt, type MarkedKind } from '../../shared/math/marks';
 
 const ROOM = 1 + 1e-9;
 
-function marksBetween(wish: FillWish, kind: MarkedKind, low: number, high: number): [number, number][] {
-  const found: [number, number][] = [];
-  for (let position = -60; position <= 120; position++) {
-    const { exact } = markAt(kind, wish.camera.scale, position);
-    if (exact >= low / ROOM && exact <= high * ROOM) found.push([exact, position]);
-  }
-  return found;
+/** All marks that any limit of these tests could allow, made once, as naming them takes long. */
+const allMarks = new Map<string, [number, number][]>();
+
+function marksOf(scale: Scale, kind: MarkedKind): [number, number][] {
+  const known = allMarks.get(`${scale} ${kind}`);
+  if (known) return known;
+  const made = Array.from({ length: 181 }, (_, i): [number, number] => [
+    markAt(kind, scale, i - 60).exact,
+    i - 60,
+  ]);
+  allMarks.set(`${scale} ${kind}`, made);
+  return made;
 }
+
+const marksBetween = (wish: FillWish, kind: MarkedKind, low: number, high: number) =>
+  marksOf(wish.camera.scale, kind).filter(([exact]) => exact >= low / ROOM && exact <= high * ROOM);
 
 /** Every setting of the camera. */
 export function everySetting(
@@ -158,4 +166,12 @@ export function leastMissOf(wish: FillWish, distancesOf?: DistancesOf): number {
     least = Math.min(least, missAt(wish, settings, distancesOf));
   }
   return least;
+}
+
+/** Whether any combination keeps every part within a miss, `isMet` of its stops. */
+export function isMetBy(wish: FillWish, isMet: (stops: number) => boolean): boolean {
+  return everySetting(wish).some(
+    ({ settings }) =>
+      isMet(Math.abs(judgeOf(wish, settings).backgroundMiss)) && isMet(missAt(wish, settings)),
+  );
 }

@@ -7,7 +7,7 @@ import {
   someNearBackground,
   type FillProblem,
 } from './fillProblem';
-import { onAimCount } from './fillScore';
+import { halfStep, onAimCount } from './fillScore';
 import type { FillSearch } from './fillSearch';
 import type { FillAim, FillWish } from './fillTypes';
 import { bestOf, type FillLimit, type LimitInTheWay } from './limitInTheWay';
@@ -78,4 +78,24 @@ export function aimsGivenUp({ problem }: FillSearch): (LimitInTheWay | null)[] {
     give(parts.ratio, 'aim_ratio', null, withAim(wish, { ratio: null })),
     give(parts.rim, 'aim_rim', null, withAim(wish, { rimStops: null })),
   ];
+}
+
+/** Both parts that light decides, as the best recipe leaves them: what is to be accepted when nothing alone helps. */
+export function aimsAsTheyAre({ problem }: FillSearch): LimitInTheWay[] {
+  const best = bestOf(problem, problem.wish.aim);
+  if (best === null) return [];
+  const { backgroundStops, subjectStops } = best.recipe.outcome.misses;
+  const parts = [
+    { limit: 'aim_background' as const, own: Math.abs(backgroundStops), other: Math.abs(subjectStops) },
+    { limit: 'aim_subject' as const, own: Math.abs(subjectStops), other: Math.abs(backgroundStops) },
+  ];
+  const allowed = halfStep(problem.grid);
+  return parts
+    .filter(({ own }) => own > allowed)
+    .map(({ limit, own, other }) => ({
+      limit,
+      shortByStops: own,
+      leavesStops: other > allowed ? other : 0,
+      recipe: best.recipe,
+    }));
 }

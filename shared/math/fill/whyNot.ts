@@ -1,4 +1,4 @@
-import { aimsGivenUp } from './aimsGivenUp';
+import { aimsAsTheyAre, aimsGivenUp } from './aimsGivenUp';
 import { onAimCount } from './fillScore';
 import type { FillSearch } from './fillSearch';
 import { gearGivenUp, gearThatHelps } from './gearGivenUp';
@@ -53,9 +53,10 @@ const present = (all: readonly (LimitInTheWay | null)[]) => all.filter((one) => 
 export function whyNot(search: FillSearch): LimitInTheWay[] {
   const { problem, least } = search;
   const onAim = onAimCount(problem.grid);
-  const missing = missingFlashes(problem);
+  const missing = missingFlashes(search);
   if (least !== null && least <= onAim) return missing;
   const enough = present(gearGivenUp(problem, onAim));
   const nearer = enough.length > 0 ? [] : present(gearThatHelps(problem, least));
-  return cheapestFirst([...enough, ...nearer, ...present(aimsGivenUp(search)), ...missing]);
+  const all = [...enough, ...nearer, ...present(aimsGivenUp(search)), ...missing];
+  return cheapestFirst(all.length > 0 ? all : aimsAsTheyAre(search));
 }

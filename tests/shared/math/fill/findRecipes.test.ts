@@ -52,19 +52,19 @@ function limitsHeld(wish: FillWish, { aperture, shutter, iso, ndStops, sync, fla
 }
 
 describe('recipes against going through every combination', () => {
-  it('misses by no more than the best of all combinations, with fixed flashes, over 1,200 requests (seeds 1 to 1200)', () => {
+  it('misses by no more than the best of all combinations, with fixed flashes, over 1,000 requests (seeds 1 to 1000)', () => {
     let checked = 0;
-    for (let seed = 1; seed <= 1200; seed++) {
+    for (let seed = 1; seed <= 1000; seed++) {
       const wish = fillScenario(seed, KITS[seed % KITS.length] as ScenarioOptions);
       const oracle = leastMissOf(wish);
       expect(countOf(missOf(wish)), `seed ${seed}, oracle ${oracle}`).toBe(countOf(oracle));
       checked++;
     }
-    expect(checked).toBe(1200);
+    expect(checked).toBe(1000);
   });
 
-  it('gives the recipe with the least score of all combinations first (seeds 2001 to 2250)', () => {
-    for (let seed = 2001; seed <= 2250; seed++) {
+  it('gives the recipe with the least score of all combinations first (seeds 2001 to 2200)', () => {
+    for (let seed = 2001; seed <= 2200; seed++) {
       const kit = KITS[seed % KITS.length] as ScenarioOptions;
       const wish = fillScenario(seed, { ...kit, marks: [2, 2, 4], powers: Math.min(kit.powers, 5) });
       const [first] = findRecipes(wish).recipes;
@@ -76,10 +76,10 @@ describe('recipes against going through every combination', () => {
     }
   });
 
-  it('misses by no more than any of many distances, where flashes may be moved (seeds 5001 to 5300)', () => {
+  it('misses by no more than any of many distances, where flashes may be moved (seeds 5001 to 5200)', () => {
     const sampled = ({ nearM, farM }: FillFlash) =>
       nearM === farM ? [nearM] : Array.from({ length: 12 }, (_, i) => nearM * (farM / nearM) ** (i / 11));
-    for (let seed = 5001; seed <= 5300; seed++) {
+    for (let seed = 5001; seed <= 5200; seed++) {
       const kit = KITS[seed % 2] as ScenarioOptions;
       const wish = fillScenario(seed, { ...kit, powers: 4, isMovable: true });
       const oracle = leastMissOf(wish, sampled);
