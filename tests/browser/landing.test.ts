@@ -1,4 +1,6 @@
+import { gzipSync } from 'node:zlib';
 import { expect, it } from 'vitest';
+import { benchClientSize } from '../bench/clientSize';
 import { openScreen } from '../support/browser';
 import { consoleVisits } from '../support/consoleVisits';
 
@@ -47,5 +49,22 @@ it('the landing page leads to the calculators and says where it has led', async 
     expect(await page.title()).toBe('Calculators · Evenfall');
     await page.waitForFunction(() => document.activeElement?.tagName === 'H1');
     expect(await menu.getAttribute('aria-expanded')).toBe('false');
+  });
+});
+
+it('the first load fetches the JavaScript that the benchmark counts, and no component library', async () => {
+  await visiting({}, async (page) => {
+    let kb = 0;
+    const scripts: Promise<void>[] = [];
+    page.on('response', (response) => {
+      if (!response.headers()['content-type']?.includes('javascript')) return;
+      scripts.push(response.body().then((body) => void (kb += gzipSync(body).length / 1000)));
+    });
+    await openScreen(page, '/');
+    await Promise.all(scripts);
+    const counted = (await benchClientSize()).find(({ name }) => name === 'client-landing')?.value ?? 0;
+    expect(scripts.length).toBeGreaterThan(3);
+    expect(kb).toBeCloseTo(counted, 3);
+    expect(await page.locator('[class*=ant-]').count()).toBe(0);
   });
 });
