@@ -2,7 +2,7 @@ import { theme } from 'ant-design-vue';
 import type { ThemeConfig } from 'ant-design-vue/es/config-provider/context';
 import { palettes, type Appearance, type Palette } from './appearance';
 
-export const FONT_FAMILY = "'Fira Sans', system-ui, sans-serif";
+const FONT_FAMILY = "'Fira Sans', system-ui, sans-serif";
 
 function tokensOf(p: Palette): NonNullable<ThemeConfig['token']> {
   return {
