@@ -1,5 +1,6 @@
 import { clippedBy, flashPulse } from '../../shared/math/flashDuration';
 import type { ExactSettings } from '../../shared/math/exposure';
+import { countOf } from '../../shared/math/fill/fillMisses';
 import type { FillFlash, FillWish, SyncKind, UsedFlash } from '../../shared/math/fill/fillTypes';
 import { markAt, type MarkedKind, type Scale } from '../../shared/math/marks';
 
@@ -111,29 +112,30 @@ export function everyCombination(
 
 export type DistancesOf = (flash: FillFlash) => readonly number[];
 
-/** What a request is judged by at one setting of the camera. */
+/** What a request is judged by at one setting of the camera; misses in stops, without their signs. */
 export interface Judge {
-  readonly backgroundMiss: number;
+  readonly background: number;
   /** ambient light on the subject, factor of a middle tone */
   readonly ambient: number;
-  readonly front: (one: Combination) => number;
+  readonly subject: (one: Combination) => number;
+  /** 0 where no ratio is wished or there are not both key and fill */
+  readonly ratio: (one: Combination) => number;
   readonly rim: (one: Combination) => number;
 }
 
 export function judgeOf(wish: FillWish, { aperture, shutterS, iso, ndStops }: ExactSettings): Judge {
   const { scene, aim } = wish;
   const has = (role: string) => wish.flashes.some((flash) => flash.role === role);
-  const ratio = aim.ratio !== null && has('key') && has('fill') ? aim.ratio : null;
+  const wished = aim.ratio !== null && has('key') && has('fill') ? aim.ratio : null;
   const ev = Math.log2((aperture * aperture) / shutterS) - Math.log2(iso / 100) + ndStops;
   const ambient = 2 ** (scene.subjectEv100 - ev);
   return {
-    backgroundMiss: scene.backgroundEv100 - ev - aim.backgroundStops,
+    background: Math.abs(scene.backgroundEv100 - ev - aim.backgroundStops),
     ambient,
-    front: ({ key, fill }) => {
-      const subject = Math.abs(Math.log2(ambient + key + fill) - aim.subjectStops);
-      if (ratio === null) return subject;
-      const off = key > 0 && fill > 0 ? Math.abs(Math.log2(1 + key / fill) - Math.log2(ratio)) : 10;
-      return Math.max(subject, Math.min(10, off));
+    subject: ({ key, fill }) => Math.abs(Math.log2(ambient + key + fill) - aim.subjectStops),
+    ratio: ({ key, fill }) => {
+      if (wished === null) return 0;
+      return key > 0 && fill > 0 ? Math.min(10, Math.abs(Math.log2(1 + key / fill) - Math.log2(wished))) : 10;
     },
     rim: ({ key }) => (key > 0 ? Math.min(10, Math.abs(Math.log2(key) - (aim.rimStops ?? 0))) : 10),
   };
@@ -144,34 +146,52 @@ export const frontOf = ({ flashes }: FillWish) => flashes.filter(({ role }) => r
 export const rimsOf = ({ flashes, aim }: FillWish) =>
   aim.rimStops === null ? [] : flashes.filter(({ role }) => role === 'rim');
 
-/** The least of the largest misses at one setting of the camera; parts that no flash could serve don't count. */
-export function missAt(wish: FillWish, settings: ExactSettings, distancesOf?: DistancesOf): number {
-  const judge = judgeOf(wish, settings);
-  const least = (flashes: readonly FillFlash[], miss: (one: Combination) => number) =>
-    Math.min(...everyCombination(wish, flashes, settings, distancesOf).map(miss));
+/** Misses over every combination, in parts of 1/120 stop as the solver counts them. */
+export interface OracleMisses {
+  /** the least of the larger of background and subject */
+  readonly main: number;
+  /** with those within half a step, the least of the larger of ratio and rim; 0 where they can't be */
+  readonly beside: number;
+  /** where all are within half a step, the least of the largest; else half a step */
+  readonly near: number;
+}
+
+export function leastMissesOf(wish: FillWish, onAim: number, distancesOf?: DistancesOf): OracleMisses {
+  let [main, beside, near] = [Infinity, Infinity, Infinity];
   const rims = rimsOf(wish);
-  return Math.max(
-    Math.abs(judge.backgroundMiss),
-    least(frontOf(wish), judge.front),
-    rims.length === 0 ? 0 : least(rims, judge.rim),
-  );
-}
-
-/** The least of the largest misses over every combination, stops. */
-export function leastMissOf(wish: FillWish, distancesOf?: DistancesOf): number {
-  let least = Infinity;
   for (const { settings } of everySetting(wish)) {
+    const judge = judgeOf(wish, settings);
+    const background = countOf(judge.background);
     // A background that is off by more can't be part of a better combination.
-    if (Math.abs(judgeOf(wish, settings).backgroundMiss) >= least) continue;
-    least = Math.min(least, missAt(wish, settings, distancesOf));
+    if (background > Math.max(main, onAim)) continue;
+    const rim =
+      rims.length === 0
+        ? 0
+        : Math.min(
+            ...everyCombination(wish, rims, settings, distancesOf).map((one) => countOf(judge.rim(one))),
+          );
+    for (const one of everyCombination(wish, frontOf(wish), settings, distancesOf)) {
+      const mainHere = Math.max(background, countOf(judge.subject(one)));
+      main = Math.min(main, mainHere);
+      if (mainHere > onAim) continue;
+      const besideHere = Math.max(rim, countOf(judge.ratio(one)));
+      beside = Math.min(beside, besideHere);
+      near = Math.min(near, Math.max(mainHere, besideHere));
+    }
   }
-  return least;
+  return { main, beside: main > onAim ? 0 : beside, near: Math.min(near, onAim) };
 }
 
-/** Whether any combination keeps every part within a miss, `isMet` of its stops. */
-export function isMetBy(wish: FillWish, isMet: (stops: number) => boolean): boolean {
-  return everySetting(wish).some(
-    ({ settings }) =>
-      isMet(Math.abs(judgeOf(wish, settings).backgroundMiss)) && isMet(missAt(wish, settings)),
-  );
+/** Whether any combination keeps every part within a miss; parts of 1/120 stop. */
+export function isMetBy(wish: FillWish, onAim: number): boolean {
+  const rims = rimsOf(wish);
+  return everySetting(wish).some(({ settings }) => {
+    const judge = judgeOf(wish, settings);
+    if (countOf(judge.background) > onAim) return false;
+    const isFrontMet = everyCombination(wish, frontOf(wish), settings).some(
+      (one) => countOf(judge.subject(one)) <= onAim && countOf(judge.ratio(one)) <= onAim,
+    );
+    if (!isFrontMet || rims.length === 0) return isFrontMet;
+    return everyCombination(wish, rims, settings).some((one) => countOf(judge.rim(one)) <= onAim);
+  });
 }

@@ -39,17 +39,17 @@ const MOST_BACKGROUND_STOPS = 20;
 /** The least by which the background has to be off for the flashes to be right, stops with its sign; null where never. */
 function backgroundRoom(problem: FillProblem): number | null {
   const { grid, wish } = problem;
-  const count = onAimCount(grid);
+  const most = { main: onAimCount(grid), beside: onAimCount(grid) };
   // Rings of one step on either side, from the aim outwards.
   for (let ring = 1; ring <= MOST_BACKGROUND_STOPS * grid.steps; ring++) {
     let best: number | null = null;
     for (const sign of [1, -1]) {
       const shifted = wish.aim.backgroundStops + (sign * ring) / grid.steps;
       const moved = { ...problem, wish: withAim(wish, { backgroundStops: shifted }) };
-      someCase(moved, count, (lens, shutter) => {
+      someCase(moved, most, (lens, shutter) => {
         const miss = backgroundMiss(problem, lens, shutter);
         if (best !== null && Math.abs(miss) >= Math.abs(best)) return false;
-        if (isWithin(caseOf(moved, lens, shutter), count)) best = miss;
+        if (isWithin(caseOf(moved, lens, shutter), most)) best = miss;
         return false;
       });
     }

@@ -1,4 +1,4 @@
-import { ABSENT_STOPS, mostAt } from './fillMisses';
+import { ABSENT_STOPS, countOf, mostAt } from './fillMisses';
 import type { FlashLevels } from './flashLevels';
 
 /** What the flashes of one part have to do, in the light of {@link FlashLevels}. */
@@ -24,28 +24,39 @@ interface Bounds {
 
 /** Sums that differ by less are the same; covers the rounding of a few additions. */
 const SAME_LIGHT = 1e-12;
+/** Two to this is still a finite number beside light of any strength. */
+const MOST_STOPS = 500;
+/** The sum may be anything; parts of 1/120 stop. */
+const ANY_SUM = 60_000;
 
-function boundsFor({ ambient, wished, ratio, isNeeded }: FlashTask, missStops: number): Bounds {
-  const isAbsentAllowed = missStops >= ABSENT_STOPS;
-  if (isNeeded && isAbsentAllowed)
-    return {
-      sumLow: 0,
-      sumHigh: Infinity,
-      ratioLow: 0,
-      ratioHigh: Infinity,
-      needsKey: false,
-      needsFill: false,
-    };
-  const factor = 2 ** missStops;
-  const free = ratio === null || isAbsentAllowed;
+/** Misses that are allowed for the sum of the light and for the ratio of key and fill; parts of 1/120 stop. */
+export interface Allowed {
+  readonly sum: number;
+  readonly ratio: number;
+}
+
+const FREE = { ratioLow: 0, ratioHigh: Infinity, needsKey: false, needsFill: false };
+
+function boundsFor(
+  { ambient, wished, ratio, isNeeded }: FlashTask,
+  sumStops: number,
+  ratioStops: number,
+): Bounds {
+  if (isNeeded && sumStops >= ABSENT_STOPS) return { sumLow: 0, sumHigh: Infinity, ...FREE };
+  const factor = 2 ** Math.min(sumStops, MOST_STOPS);
   // Each bound is wider by its own rounding, since lights may differ by any number of stops.
-  return {
+  const sum = {
     sumLow: wished * (1 / factor - SAME_LIGHT) - ambient,
     sumHigh: wished * factor * (1 + SAME_LIGHT) - ambient,
-    ratioLow: free ? 0 : Math.max(0, (ratio / factor) * (1 - SAME_LIGHT) - 1),
-    ratioHigh: free ? Infinity : ratio * factor * (1 + SAME_LIGHT) - 1,
-    needsKey: isNeeded || !free,
-    needsFill: !free,
+  };
+  if (ratio === null || ratioStops >= ABSENT_STOPS) return { ...sum, ...FREE, needsKey: isNeeded };
+  const ratioFactor = 2 ** ratioStops;
+  return {
+    ...sum,
+    ratioLow: Math.max(0, (ratio / ratioFactor) * (1 - SAME_LIGHT) - 1),
+    ratioHigh: ratio * ratioFactor * (1 + SAME_LIGHT) - 1,
+    needsKey: true,
+    needsFill: true,
   };
 }
 
@@ -64,12 +75,49 @@ function isPossible(b: Bounds, k1: number, k2: number, l1: number, l2: number): 
 /** Which power each flash has, by its place in `powers`. */
 export type Assignment = readonly number[];
 
+/** What the flashes from one place on can give: their most, and the least of any one that is on. */
+interface Rest {
+  readonly key: number;
+  readonly fill: number;
+  readonly leastKey: number;
+  readonly leastFill: number;
+}
+
+/** From each place on, with no flash above its top. */
+function restsOf(flashes: readonly FlashLevels[], tops: readonly number[]): Rest[] {
+  const rests: Rest[] = [{ key: 0, fill: 0, leastKey: Infinity, leastFill: Infinity }];
+  for (let i = flashes.length - 1; i >= 0; i--) {
+    const [one, before] = [flashes[i], rests[0]];
+    if (one === undefined || before === undefined) continue;
+    const top = tops[i] ?? 0;
+    const most = one.high[top] ?? 0;
+    const least = top > 0 ? (one.low[1] ?? Infinity) : Infinity;
+    rests.unshift(
+      one.isFill
+        ? { ...before, fill: before.fill + most, leastFill: Math.min(before.leastFill, least) }
+        : { ...before, key: before.key + most, leastKey: Math.min(before.leastKey, least) },
+    );
+  }
+  return rests;
+}
+
+/** The first level that can give as much, by halving; levels rise. */
+function firstGiving(high: Float64Array, needed: number, end: number): number {
+  let [first, last] = [0, end];
+  while (first < last) {
+    const middle = (first + last) >> 1;
+    if ((high[middle] ?? 0) < needed) first = middle + 1;
+    else last = middle;
+  }
+  return first;
+}
+
 /**
  * The first way to set the flashes that keeps within a miss, powers tried from off upwards, flash by flash.
  *
- * @param flashes strongest first
+ * @param flashes fills first, each role from the strongest down
  * @param task what is wished
- * @param count the miss that is allowed, parts of 1/120 stop
+ * @param allowed the misses that are allowed
  * @param mostPower fraction of full power that no flash may exceed
  * @param mostUsed flashes that may be in use
  * @returns a place in `powers` for each flash, or null where there is no way
@@ -78,35 +126,45 @@ export type Assignment = readonly number[];
 export function assignWithin(
   flashes: readonly FlashLevels[],
   task: FlashTask,
-  count: number,
+  allowed: Allowed,
   mostPower = 1,
   mostUsed = flashes.length,
 ): Assignment | null {
-  const b = boundsFor(task, mostAt(count));
+  const b = boundsFor(task, mostAt(allowed.sum), mostAt(allowed.ratio));
   if (b.sumHigh < 0) return null;
   const tops = flashes.map(({ powers }) => topOf(powers, mostPower));
-  const [keyRest, fillRest] = restsOf(flashes, tops);
+  const rests = restsOf(flashes, tops);
   const chosen = new Array<number>(flashes.length).fill(0);
+  const isLeft = (i: number, k1: number, k2: number, l1: number, l2: number): boolean => {
+    const rest = rests[i];
+    if (rest === undefined) return false;
+    const leastKey = b.needsKey && k2 === 0 ? rest.leastKey : k1;
+    const leastFill = b.needsFill && l2 === 0 ? rest.leastFill : l1;
+    return isPossible(b, leastKey, k2 + rest.key, leastFill, l2 + rest.fill);
+  };
   const go = (i: number, used: number, k1: number, k2: number, l1: number, l2: number): boolean => {
-    const one = flashes[i];
-    if (one === undefined) return !((b.needsKey && k2 === 0) || (b.needsFill && l2 === 0));
-    const [moreKey, moreFill] = [keyRest[i + 1] ?? 0, fillRest[i + 1] ?? 0];
+    const [one, rest] = [flashes[i], rests[i + 1]];
+    if (one === undefined || rest === undefined) return true;
     const { low, high, isFill } = one;
     const top = used < mostUsed ? (tops[i] ?? 0) : 0;
-    for (let level = 0; level <= top; level++) {
+    // What is needed of this flash when all that follow give their most.
+    const needed = isFill
+      ? Math.max(b.sumLow - k2 - rest.key, k1 / b.ratioHigh) - l2 - rest.fill
+      : Math.max(b.sumLow - l2 - rest.fill, b.ratioLow * l1) - k2 - rest.key;
+    const most = b.sumHigh - k1 - l1;
+    for (let level = firstGiving(high, needed * (1 - SAME_LIGHT), top + 1); level <= top; level++) {
       const [lo, hi] = [low[level] ?? 0, high[level] ?? 0];
+      if (lo > most) break;
       const [k, kk] = isFill ? [k1, k2] : [k1 + lo, k2 + hi];
       const [l, ll] = isFill ? [l1 + lo, l2 + hi] : [l1, l2];
-      if (k + l > b.sumHigh) break;
-      if (!isPossible(b, k, kk + moreKey, l, ll + moreFill)) continue;
+      if (!isLeft(i + 1, k, kk, l, ll)) continue;
       chosen[i] = level;
       if (go(i + 1, level === 0 ? used : used + 1, k, kk, l, ll)) return true;
     }
     chosen[i] = 0;
     return false;
   };
-  if (!isPossible(b, 0, keyRest[0] ?? 0, 0, fillRest[0] ?? 0)) return null;
-  return go(0, 0, 0, 0, 0, 0) ? chosen : null;
+  return isLeft(0, 0, 0, 0, 0) && go(0, 0, 0, 0, 0, 0) ? chosen : null;
 }
 
 function topOf(powers: readonly number[], mostPower: number): number {
@@ -115,42 +173,7 @@ function topOf(powers: readonly number[], mostPower: number): number {
   return top;
 }
 
-/** The most that the flashes from each place on can give, key and fill. */
-function restsOf(flashes: readonly FlashLevels[], tops: readonly number[]): [number[], number[]] {
-  const key = new Array<number>(flashes.length + 1).fill(0);
-  const fill = new Array<number>(flashes.length + 1).fill(0);
-  for (let i = flashes.length - 1; i >= 0; i--) {
-    const most = flashes[i]?.high[tops[i] ?? 0] ?? 0;
-    const isFill = flashes[i]?.isFill ?? false;
-    key[i] = (key[i + 1] ?? 0) + (isFill ? 0 : most);
-    fill[i] = (fill[i + 1] ?? 0) + (isFill ? most : 0);
-  }
-  return [key, fill];
-}
-
-/**
- * The least miss that any setting of the flashes leaves, in parts of 1/120 stop, by halving between bounds.
- *
- * @param low a miss that is known to be the least possible; parts of 1/120 stop
- * @param high the largest that is of interest; parts of 1/120 stop
- * @returns parts of 1/120 stop, or null where even `high` is out of reach
- */
-export function leastCount(
-  flashes: readonly FlashLevels[],
-  task: FlashTask,
-  low: number,
-  high: number,
-): number | null {
-  if (assignWithin(flashes, task, low) !== null) return low;
-  if (high <= low || assignWithin(flashes, task, high) === null) return null;
-  let [below, at] = [low, high];
-  while (at - below > 1) {
-    const middle = Math.floor((below + at) / 2);
-    if (assignWithin(flashes, task, middle) === null) below = middle;
-    else at = middle;
-  }
-  return at;
-}
+const alike = (count: number): Allowed => ({ sum: count, ratio: count });
 
 /** The lowest place from `low` to `high` at which `find` finds something, and what; the last one is known to. */
 function lowestFound<T>(low: number, high: number, known: T, find: (place: number) => T | null): [number, T] {
@@ -165,31 +188,83 @@ function lowestFound<T>(low: number, high: number, known: T, find: (place: numbe
 }
 
 /**
- * The flashes as they are set: as few as keep within a miss, with so many the least miss, then the least power of the
- * one that works hardest, then the first way in order.
+ * The least miss that any setting of the flashes leaves, the larger of sum and ratio, by halving.
+ *
+ * @param most the largest that is of interest; parts of 1/120 stop
+ * @returns parts of 1/120 stop, or null where even `most` is out of reach
+ */
+export function leastCount(flashes: readonly FlashLevels[], task: FlashTask, most: number): number | null {
+  const find = (count: number) => assignWithin(flashes, task, alike(count));
+  const known = find(most);
+  if (known === null) return null;
+  return find(0) === null ? lowestFound(1, most, known, find)[0] : 0;
+}
+
+/** The same for the ratio alone, whatever the sum; an absent ratio is missed by ten stops. */
+export function leastRatioCount(flashes: readonly FlashLevels[], task: FlashTask): number {
+  const absent = countOf(ABSENT_STOPS);
+  const find = (count: number) => assignWithin(flashes, task, { sum: ANY_SUM, ratio: count });
+  return lowestFound(0, absent, null as Assignment | null, find)[0];
+}
+
+/**
+ * What sum and ratio miss by at least: alike where both can be on the aim; else the sum as little as half a step
+ * allows, and then the ratio.
+ *
+ * @param most the largest miss of the sum that is of interest; parts of 1/120 stop
+ * @param onAim half a step; parts of 1/120 stop
+ * @returns the misses, or null where even `most` is out of reach
+ */
+export function leastMisses(
+  flashes: readonly FlashLevels[],
+  task: FlashTask,
+  most: number,
+  onAim: number,
+): Allowed | null {
+  const both = leastCount(flashes, task, Math.min(most, onAim));
+  if (both !== null) return alike(both);
+  const absent = countOf(ABSENT_STOPS);
+  const withSum = (sum: number) => assignWithin(flashes, task, { sum, ratio: absent });
+  const any = withSum(most);
+  if (any === null) return null;
+  const [sum, found] = lowestFound(onAim, most, any, withSum);
+  if (task.ratio === null) return alike(sum);
+  const [ratio] = lowestFound(onAim, absent, found, (at) => assignWithin(flashes, task, { sum, ratio: at }));
+  return { sum, ratio };
+}
+
+/**
+ * The flashes as they are set: as few as keep within the misses that are allowed, with so many the least miss, then the
+ * least power of the one that works hardest, then the first way in order.
  *
  * @param powers every power that one of them can be set to, rising
- * @param least the least miss that there is; parts of 1/120 stop, from {@link leastCount}
- * @param allowed the miss that may not be exceeded; parts of 1/120 stop, `least` or more
- * @returns a place in `powers` for each flash and the miss, or null where there is no way
+ * @param least from {@link leastMisses}
+ * @param spare what may be spent on fewer flashes where sum and ratio are alike; parts of 1/120 stop
+ * @returns a place in `powers` for each flash and the misses, or null where there is no way
  */
 export function easiestAssignment(
   flashes: readonly FlashLevels[],
   powers: readonly number[],
   task: FlashTask,
-  least: number,
-  allowed: number,
-): { readonly chosen: Assignment; readonly count: number } | null {
-  const all = flashes.length;
-  const any = assignWithin(flashes, task, allowed);
+  least: Allowed,
+  spare: number,
+): { readonly chosen: Assignment; readonly allowed: Allowed } | null {
+  const isAlike = least.sum === least.ratio;
+  const wide = isAlike ? alike(Math.max(least.sum, spare)) : least;
+  const any = assignWithin(flashes, task, wide);
   if (any === null) return null;
-  const [used, few] = lowestFound(0, all, any, (most) => assignWithin(flashes, task, allowed, 1, most));
-  const [count, near] = lowestFound(least, allowed, few, (at) => assignWithin(flashes, task, at, 1, used));
-  if (used === 0) return { chosen: near, count };
-  const [, chosen] = lowestFound(0, powers.length - 1, near, (place) =>
-    assignWithin(flashes, task, count, powers[place], used),
+  const [used, few] = lowestFound(0, flashes.length, any, (most) =>
+    assignWithin(flashes, task, wide, 1, most),
   );
-  return { chosen, count };
+  const tight = (count: number): Allowed => (isAlike ? alike(count) : { sum: count, ratio: wide.ratio });
+  const [count, near] = lowestFound(0, wide.sum, few, (at) =>
+    assignWithin(flashes, task, tight(at), 1, used),
+  );
+  if (used === 0) return { chosen: near, allowed: tight(count) };
+  const [, chosen] = lowestFound(0, powers.length - 1, near, (place) =>
+    assignWithin(flashes, task, tight(count), powers[place], used),
+  );
+  return { chosen, allowed: tight(count) };
 }
 
 /** Key and fill of an assignment: what they give, or from what to what where flashes may be moved. */
@@ -204,17 +279,19 @@ function spanOf(flashes: readonly FlashLevels[], chosen: Assignment) {
 }
 
 /** The key and fill within an assignment's reach that come nearest to the task. */
-function nearestMix(task: FlashTask, span: ReturnType<typeof spanOf>, count: number): [number, number] {
+function nearestMix(task: FlashTask, span: ReturnType<typeof spanOf>, allowed: Allowed): [number, number] {
   const { k1, k2, l1, l2 } = span;
   if (k1 === k2 && l1 === l2) return [k1, l1];
-  let [bad, good] = [0, mostAt(count)];
-  if (isPossible(boundsFor(task, 0), k1, k2, l1, l2)) good = 0;
+  const isAlike = allowed.sum === allowed.ratio;
+  const boundsAt = (stops: number) => boundsFor(task, stops, isAlike ? stops : mostAt(allowed.ratio));
+  let [bad, good] = [0, mostAt(allowed.sum)];
+  if (isPossible(boundsAt(0), k1, k2, l1, l2)) good = 0;
   for (let i = 0; i < 60 && good - bad > 1e-15; i++) {
     const middle = (bad + good) / 2;
-    if (isPossible(boundsFor(task, middle), k1, k2, l1, l2)) good = middle;
+    if (isPossible(boundsAt(middle), k1, k2, l1, l2)) good = middle;
     else bad = middle;
   }
-  const b = boundsFor(task, good);
+  const b = boundsAt(good);
   const [low, high] = fillBetween(b, k1, k2, l1, l2);
   const fill = clamp((low + high) / 2, l1, l2);
   const keyLow = Math.max(k1, b.sumLow - fill, b.ratioLow * fill);
@@ -235,10 +312,10 @@ export function distancesFor(
   flashes: readonly FlashLevels[],
   task: FlashTask,
   chosen: Assignment,
-  count: number,
+  allowed: Allowed,
 ): number[] {
   const span = spanOf(flashes, chosen);
-  const [key, fill] = nearestMix(task, span, count);
+  const [key, fill] = nearestMix(task, span, allowed);
   let [keyMissing, fillMissing] = [key - span.k1, fill - span.l1];
   return flashes.map(({ flash, low, high, isFill }, i) => {
     const [lo, hi] = [low[chosen[i] ?? 0] ?? 0, high[chosen[i] ?? 0] ?? 0];

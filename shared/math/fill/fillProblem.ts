@@ -1,4 +1,4 @@
-import { assignWithin, leastCount, type FlashTask } from './assignFlashes';
+import { assignWithin, leastRatioCount, type FlashTask } from './assignFlashes';
 import { cameraGrid, type CameraGrid, type GridLens, type GridShutter } from './cameraGrid';
 import { ABSENT_STOPS, countOf, mostAt } from './fillMisses';
 import type { FillWish } from './fillTypes';
@@ -6,6 +6,15 @@ import { flashTables, type FlashTable } from './flashLevels';
 
 /** More than any miss, in parts of 1/120 stop: light spans less than 500 stops. */
 export const ANY_COUNT = 60_000;
+/**
+ * Misses in parts of 1/120 stop: the main ones, of background and subject, and those beside, of ratio and rim, which
+ * may never cost the main ones anything.
+ */
+export interface MissLimits {
+  readonly main: number;
+  readonly beside: number;
+}
+
 /** Two to this is still a finite number beside light of any strength. */
 const MOST_ROOM_STOPS = 500;
 
@@ -58,6 +67,18 @@ export function backgroundMiss({ wish }: FillProblem, lens: GridLens, shutter: G
   return wish.scene.backgroundEv100 - wish.aim.backgroundStops - lens.stops - shutter.tv;
 }
 
+/** The least by which key and fill miss a ratio, whatever their sum; known once for a table. */
+function leastRatioMiss(table: FlashTable, ratio: number): number {
+  const known = ratioMisses.get(table);
+  if (known?.ratio === ratio) return known.count;
+  const task = { ambient: 1, wished: 1, ratio, isNeeded: false };
+  const count = leastRatioCount(table.front, task);
+  ratioMisses.set(table, { ratio, count });
+  return count;
+}
+
+const ratioMisses = new WeakMap<FlashTable, { ratio: number; count: number }>();
+
 /** A case with what its flashes have to do, all in the light of the flash table: f/1, ISO 100, no filter. */
 export function caseOf(problem: FillProblem, lens: GridLens, shutter: GridShutter): FillCase {
   const { wish, parts, tableAt } = problem;
@@ -83,25 +104,14 @@ export function caseOf(problem: FillProblem, lens: GridLens, shutter: GridShutte
 }
 
 /**
- * Whether a case keeps its background within a miss of so many parts, and its flashes front and rim.
- * @param flashCount what is allowed for front and rim where that is not the same
+ * Whether a case keeps within misses.
+ * @param flash what is allowed for the flashes where that is not the same
  */
-export function isWithin(one: FillCase, count: number, flashCount = count): boolean {
-  return one.backgroundCount <= count && areFlashesWithin(one, flashCount);
-}
-
-/** Whether the flashes of a case keep front and rim within a miss of so many parts. */
-export function areFlashesWithin(one: FillCase, flashCount: number): boolean {
-  if (assignWithin(one.table.front, one.front, flashCount) === null) return false;
-  return one.rim === null || assignWithin(one.table.rim, one.rim, flashCount) !== null;
-}
-
-/** The least misses of front and rim; parts of 1/120 stop; null where one of them is over the limit. */
-export function leastCounts(one: FillCase, limit: number): { front: number; rim: number } | null {
-  const front = leastCount(one.table.front, one.front, 0, limit);
-  if (front === null) return null;
-  const rim = one.rim === null ? 0 : leastCount(one.table.rim, one.rim, 0, limit);
-  return rim === null ? null : { front, rim };
+export function isWithin(one: FillCase, most: MissLimits, flash = most): boolean {
+  if (one.backgroundCount > most.main) return false;
+  const { front, rim, table } = one;
+  if (assignWithin(table.front, front, { sum: flash.main, ratio: flash.beside }) === null) return false;
+  return rim === null || assignWithin(table.rim, rim, { sum: flash.beside, ratio: flash.beside }) !== null;
 }
 
 /** Where the shutters from one Tv to another begin and end in a list that runs from slow to fast. */
@@ -149,41 +159,51 @@ export function someNearBackground(
 }
 
 /**
- * Goes through the lenses and shutters that may keep within a miss, each with the least miss that it can have: that of
- * the background, that of a subject which ambient light alone makes too bright or all flashes at full leave too dark,
- * and the same for the rim.
+ * Goes through the lenses and shutters that may keep within misses, each with the least misses that it can have: of the
+ * background, of a subject which ambient light alone makes too bright or all flashes at full leave too dark; and
+ * beside them of a ratio that no powers give, and of a rim that is too weak.
  *
- * @param count the miss; parts of 1/120 stop
+ * @param most the misses that are allowed
  * @param visit what is done with a case; true ends the round
  * @returns whether a visit ended it
  */
 export function someCase(
   problem: FillProblem,
-  count: number,
-  visit: (lens: GridLens, shutter: GridShutter, bound: number) => boolean,
+  most: MissLimits,
+  visit: (lens: GridLens, shutter: GridShutter, bound: MissLimits) => boolean,
 ): boolean {
   const { wish, parts, tableAt } = problem;
-  const room = mostAt(count);
-  const factor = 2 ** Math.min(room, MOST_ROOM_STOPS);
+  const factor = 2 ** Math.min(mostAt(most.main), MOST_ROOM_STOPS);
   const subject = 2 ** wish.aim.subjectStops;
   const ambient = 2 ** wish.scene.subjectEv100;
-  const rim = parts.rim && room < ABSENT_STOPS ? 2 ** (wish.aim.rimStops ?? 0) : 0;
-  const known: { front: number; rim: number }[] = [];
-  const mostAtShutter = (place: number, shutter: GridShutter) => {
-    const table = tableAt(shutter);
-    const loss = 2 ** -shutter.lossStops;
-    return (known[place] ??= { front: (table.keyMost + table.fillMost) * loss, rim: table.rimMost * loss });
-  };
-  return someNearBackground(problem, count, (lens, shutter, place) => {
+  const known: ShutterBounds[] = [];
+  return someNearBackground(problem, most.main, (lens, shutter, place) => {
     const there = ambient * lens.factor * shutter.mark.exact;
     if (there > subject * factor) return false;
-    const most = mostAtShutter(place, shutter);
-    const full = there + most.front * lens.factor;
-    if (full * factor < subject || most.rim * lens.factor * factor < rim) return false;
+    const bounds = (known[place] ??= boundsAt(problem, shutter));
+    const full = there + bounds.front * lens.factor;
+    if (full * factor < subject) return false;
     let miss = Math.abs(backgroundMiss(problem, lens, shutter));
     if (there > subject) miss = Math.max(miss, Math.log2(there / subject));
     else if (full < subject) miss = Math.max(miss, Math.log2(subject / full));
-    const bound = countOf(miss);
-    return bound <= count && visit(lens, shutter, bound);
+    const main = countOf(miss);
+    if (main > most.main) return false;
+    if (parts.ratio) bounds.ratio ??= leastRatioMiss(tableAt(shutter), wish.aim.ratio ?? 2);
+    const weak = Math.min(ABSENT_STOPS, (wish.aim.rimStops ?? 0) - Math.log2(bounds.rim * lens.factor));
+    const beside = Math.max(bounds.ratio ?? 0, parts.rim && weak > 0 ? countOf(weak) : 0);
+    return beside <= most.beside && visit(lens, shutter, { main, beside });
   });
+}
+
+/** What bounds all cases with one shutter: the most of front and rim, and the least miss of the ratio. */
+interface ShutterBounds {
+  readonly front: number;
+  readonly rim: number;
+  ratio?: number;
+}
+
+function boundsAt({ tableAt }: FillProblem, shutter: GridShutter): ShutterBounds {
+  const table = tableAt(shutter);
+  const loss = 2 ** -shutter.lossStops;
+  return { front: (table.keyMost + table.fillMost) * loss, rim: table.rimMost * loss };
 }

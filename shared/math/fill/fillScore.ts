@@ -2,7 +2,7 @@ import type { CameraGrid, GridLens, GridShutter } from './cameraGrid';
 import { stepsPerStop, type Scale } from '../marks';
 import { countOf, mostAt, sizesOf } from './fillMisses';
 import { handheldOf } from './fillOutcome';
-import type { FillCase, FillProblem } from './fillProblem';
+import type { FillCase, FillProblem, MissLimits } from './fillProblem';
 import type { FillOutcome, FillPreference, SyncKind } from './fillTypes';
 
 /**
@@ -17,12 +17,15 @@ export interface FillObjective {
 export const OWN_WEIGHT = 10;
 export const ALTERNATIVE_WEIGHT = 0.9;
 
-/** 1/120 stop away from the aim outweighs all the rest, which stays below it. */
-const PER_PART = 1000;
+/**
+ * The aim comes first: by how much background or subject are over half a step, then ratio or rim, then the largest miss
+ * within half a step, each in parts of 1/120 stop and each outweighing all that follows; everything else together
+ * stays below one such part.
+ */
+const PER_NEAR_PART = 1000;
+const PER_BESIDE_PART = 100 * PER_NEAR_PART;
+const PER_MAIN_PART = 2000 * PER_BESIDE_PART;
 const MOST_BESIDE = 999;
-/** Each further part over half a step, a stop. */
-const PER_FURTHER_STOP = 20;
-const MOST_FURTHER = 400;
 const PER_HANDHELD_STOP = 4;
 const PER_GHOST_LEVEL = 3;
 const PER_ISO_STOP = 1;
@@ -95,16 +98,12 @@ export function gatheringS(outcome: FillOutcome, sync: SyncKind, shutterS: numbe
 
 /** What an outcome costs beside the camera's settings and its largest miss. */
 export function outcomeCost(
-  problem: FillProblem,
   { prefer, weight }: FillObjective,
   outcome: FillOutcome,
   sync: SyncKind,
   shutterS: number,
 ): number {
-  const sizes = sizesOf(outcome.misses, problem.parts);
-  const over = sizes.map((size) => Math.max(0, size - halfStep(problem.grid)));
-  const further = over.reduce((sum, one) => sum + one, 0) - Math.max(...over);
-  let cost = Math.min(MOST_FURTHER, PER_FURTHER_STOP * further);
+  let cost = 0;
   if (outcome.ghost !== null) cost += PER_GHOST_LEVEL * GHOST_LEVELS[outcome.ghost.visibility];
   if (sync === 'highSpeed') cost += HIGH_SPEED_COST;
   if (outcome.reserveStops !== null)
@@ -121,11 +120,26 @@ export function largestMiss(problem: FillProblem, outcome: FillOutcome): number 
   return Math.max(...sizesOf(outcome.misses, problem.parts));
 }
 
-/** How far an outcome is from the parts of the aim that the flashes can serve, in parts of 1/120 stop. */
-export function missCount(problem: FillProblem, outcome: FillOutcome): number {
-  return countOf(largestMiss(problem, outcome));
+/** How an outcome misses the parts of the aim that the flashes can serve. */
+export interface MissCounts extends MissLimits {
+  /** the largest of all, up to half a step */
+  readonly near: number;
 }
 
-/** Parts of 1/120 stop first, everything else behind them. */
-export const scoreOf = (count: number, cost: number): number =>
-  PER_PART * count + Math.min(MOST_BESIDE, cost);
+export function missCounts(problem: FillProblem, outcome: FillOutcome): MissCounts {
+  const none = { ratio: false, rim: false };
+  const main = countOf(Math.max(...sizesOf(outcome.misses, none)));
+  const [, , ...others] = sizesOf(outcome.misses, problem.parts);
+  const beside = countOf(Math.max(0, ...others));
+  return { main, beside, near: Math.min(onAimCount(problem.grid), Math.max(main, beside)) };
+}
+
+export function scoreOf(grid: Pick<CameraGrid, 'steps'>, counts: MissCounts, cost: number): number {
+  const onAim = onAimCount(grid);
+  return (
+    PER_MAIN_PART * Math.max(0, counts.main - onAim) +
+    PER_BESIDE_PART * Math.max(0, counts.beside - onAim) +
+    PER_NEAR_PART * counts.near +
+    Math.min(MOST_BESIDE, cost)
+  );
+}

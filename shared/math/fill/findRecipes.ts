@@ -2,7 +2,7 @@ import { fillProblem } from './fillProblem';
 import {
   ALTERNATIVE_WEIGHT,
   caseCost,
-  missCount,
+  missCounts,
   outcomeCost,
   OWN_WEIGHT,
   scoreOf,
@@ -51,8 +51,8 @@ function rescored({ problem }: FillSearch, own: FillObjective, { recipe, stops }
   const cost =
     caseCost(problem, lens, shutter) +
     settingCost(grid, own, lens, position) +
-    outcomeCost(problem, own, recipe.outcome, recipe.sync, recipe.shutter.exact);
-  return { ...recipe, score: scoreOf(missCount(problem, recipe.outcome), cost) };
+    outcomeCost(own, recipe.outcome, recipe.sync, recipe.shutter.exact);
+  return { ...recipe, score: scoreOf(grid, missCounts(problem, recipe.outcome), cost) };
 }
 
 /** Finds recipes for a request; the search is given too, for what else is to be asked of it. */

@@ -76,11 +76,14 @@ function tableOf(levels: readonly FlashLevels[]): FlashTable {
   };
 }
 
-/** Strongest first, then by name, so that the order in the request changes nothing. */
+/** Fills first, then the strongest, then by name, so that the order in the request changes nothing. */
 function inOwnOrder(flashes: readonly FillFlash[]): FillFlash[] {
   const strength = ({ guideNumberM, lossStops, nearM }: FillFlash) =>
     2 * Math.log2(guideNumberM / nearM) - lossStops;
-  return [...flashes].sort((a, b) => strength(b) - strength(a) || (a.name < b.name ? -1 : 1));
+  const turn = ({ role }: FillFlash) => (role === 'fill' ? 0 : 1);
+  return [...flashes].sort(
+    (a, b) => turn(a) - turn(b) || strength(b) - strength(a) || (a.name < b.name ? -1 : 1),
+  );
 }
 
 /**

@@ -1,6 +1,8 @@
 import { assumedCurtainS } from '../highSpeedSync';
-import { ANY_COUNT, fillProblem, type FillProblem } from './fillProblem';
-import { isReachable, startSearch } from './fillSearch';
+import { ABSENT_STOPS, countOf } from './fillMisses';
+import { ANY_COUNT, fillProblem, type FillProblem, type MissLimits } from './fillProblem';
+import { onAimCount } from './fillScore';
+import { isReachable, startSearch, type FillSearch } from './fillSearch';
 import type { FillWish } from './fillTypes';
 import { bestOf, type LimitInTheWay } from './limitInTheWay';
 import {
@@ -17,13 +19,13 @@ const HALVINGS = 12;
 /** Giving up a limit that brings less than this is no help. */
 const LEAST_HELP = 6;
 
-/** The fewest steps by which a limit must move for a miss of so many parts to be kept; null where none are enough. */
+/** The fewest steps by which a limit must move for misses to be kept; null where none are enough. */
 function fewestSteps(
   problem: FillProblem,
   { mostSteps, isNested, movedBy, alone }: MovableLimit,
-  count: number,
+  most: MissLimits,
 ): number | null {
-  const reaches = (steps: number) => isReachable(fillProblem((alone ?? movedBy)(steps), problem), count);
+  const reaches = (steps: number) => isReachable(fillProblem((alone ?? movedBy)(steps), problem), most);
   if (!isNested) {
     for (let steps = 1; steps <= mostSteps; steps++) if (reaches(steps)) return steps;
     return null;
@@ -38,26 +40,33 @@ function fewestSteps(
   return at;
 }
 
-function givenUp(problem: FillProblem, movable: MovableLimit, count: number): LimitInTheWay | null {
-  const steps = fewestSteps(problem, movable, count);
+function givenUp(problem: FillProblem, movable: MovableLimit, most: MissLimits): LimitInTheWay | null {
+  const steps = fewestSteps(problem, movable, most);
   if (steps === null) return null;
   const best = bestOf(fillProblem(movable.movedBy(steps), problem), problem.wish.aim);
   return best && { limit: movable.limit, shortByStops: steps / problem.grid.steps, ...best };
 }
 
+/** Whether a flash lights its part by itself, so that moving it can bring that part onto the aim exactly. */
+function isAlone({ flashes }: FillWish, limit: FlashLimit): boolean {
+  const isRim = limit.startsWith('rim');
+  return flashes.filter(({ role }) => (role === 'rim') === isRim).length === 1;
+}
+
 /** How near (or far) flashes have to go, by halving; first for the aim itself, else for what still counts as on it. */
-function flashesGivenUp(problem: FillProblem, limit: FlashLimit, count: number): LimitInTheWay | null {
+function flashesGivenUp(problem: FillProblem, limit: FlashLimit, most: MissLimits): LimitInTheWay | null {
   const { wish } = problem;
   const mostStops = mostMovedStops(wish, limit);
   if (!hasFlashesFor(wish, limit) || mostStops === 0) return null;
-  const reaches = (stops: number, flashCount: number) =>
-    isReachable(fillProblem(flashesMoved(wish, limit, stops), problem), count, flashCount);
-  if (!reaches(mostStops, count)) return null;
-  const flashCount = reaches(mostStops, 0) ? 0 : count;
+  const reaches = (stops: number, flash: MissLimits) =>
+    isReachable(fillProblem(flashesMoved(wish, limit, stops), problem), most, flash);
+  if (!reaches(mostStops, most)) return null;
+  const exact = limit.startsWith('rim') ? { ...most, beside: 0 } : { ...most, main: 0 };
+  const flash = isAlone(wish, limit) && reaches(mostStops, exact) ? exact : most;
   let [below, at] = [0, mostStops];
   for (let i = 0; i < HALVINGS; i++) {
     const middle = (below + at) / 2;
-    if (reaches(middle, flashCount)) at = middle;
+    if (reaches(middle, flash)) at = middle;
     else below = middle;
   }
   const best = bestOf(fillProblem(flashesMoved(wish, limit, at), problem), wish.aim);
@@ -74,7 +83,7 @@ const FLASH_LIMITS: readonly FlashLimit[] = [
 ];
 
 /** High-speed sync where the camera has none: by how many stops the recipe's shutter is over the sync speed. */
-function highSpeedSyncGivenUp(problem: FillProblem, count: number): LimitInTheWay | null {
+function highSpeedSyncGivenUp(problem: FillProblem, most: MissLimits): LimitInTheWay | null {
   const { wish } = problem;
   const { highSpeedSync, syncSpeedS } = wish.camera;
   if (highSpeedSync !== null) return null;
@@ -83,7 +92,7 @@ function highSpeedSyncGivenUp(problem: FillProblem, count: number): LimitInTheWa
     highSpeedSync: { curtainS: assumedCurtainS(syncSpeedS), extraLossStops: 0 },
   };
   const able = fillProblem({ ...wish, camera }, problem);
-  const best = isReachable(able, count) ? bestOf(able, wish.aim) : null;
+  const best = isReachable(able, most) ? bestOf(able, wish.aim) : null;
   return (
     best && {
       limit: 'high_speed_sync',
@@ -93,36 +102,50 @@ function highSpeedSyncGivenUp(problem: FillProblem, count: number): LimitInTheWa
   );
 }
 
-/** Every limit of the gear that alone, given up, lets a miss of so many parts be kept. */
-export function gearGivenUp(problem: FillProblem, count: number): (LimitInTheWay | null)[] {
-  const { wish } = problem;
-  const ofFlashes = FLASH_LIMITS.map((limit) => flashesGivenUp(problem, limit, count));
+/** Every limit of the gear that alone, given up, lets the aim be met. */
+export function gearGivenUp(problem: FillProblem): (LimitInTheWay | null)[] {
+  const { wish, grid } = problem;
+  const most = { main: onAimCount(grid), beside: onAimCount(grid) };
+  const ofFlashes = FLASH_LIMITS.map((limit) => flashesGivenUp(problem, limit, most));
   const isOneEnough = ofFlashes.some((one) => one?.limit === 'key_power' || one?.limit === 'fill_power');
   return [
-    ...movableLimits(wish).map((movable) => givenUp(problem, movable, count)),
-    highSpeedSyncGivenUp(problem, count),
+    ...movableLimits(wish).map((movable) => givenUp(problem, movable, most)),
+    highSpeedSyncGivenUp(problem, most),
     ...ofFlashes,
-    isOneEnough ? null : flashesGivenUp(problem, 'front_power', count),
+    isOneEnough ? null : flashesGivenUp(problem, 'front_power', most),
   ];
 }
 
+/** The misses that would be a help, and with them those that a changed problem then reaches; null where it is none. */
+function helpedTo(changed: FillProblem, { least, problem }: FillSearch): MissLimits | null {
+  const onAim = onAimCount(problem.grid);
+  const absent = countOf(ABSENT_STOPS);
+  const isMainOff = least === null || least.main > onAim;
+  const most = isMainOff
+    ? { main: least === null ? ANY_COUNT : least.main - LEAST_HELP, beside: absent }
+    : { main: onAim, beside: least.beside - LEAST_HELP };
+  if (!isReachable(changed, most)) return null;
+  const reached = startSearch(changed).least;
+  if (reached === null) return null;
+  return isMainOff
+    ? { main: Math.max(onAim, reached.main), beside: absent }
+    : { main: onAim, beside: Math.max(onAim, reached.beside) };
+}
+
 /** Every limit of the gear that, given up, brings the best recipe nearer to the aim, though not onto it. */
-export function gearThatHelps(problem: FillProblem, least: number | null): (LimitInTheWay | null)[] {
+export function gearThatHelps(search: FillSearch): (LimitInTheWay | null)[] {
+  const { problem } = search;
   const { wish } = problem;
-  const most = least === null ? ANY_COUNT : least - LEAST_HELP;
-  const helpful = (changed: FillWish) => {
-    const other = fillProblem(changed, problem);
-    return most >= 0 && isReachable(other, most) ? startSearch(other).least : null;
-  };
   const cameras = movableLimits(wish)
     .filter(({ isNested, mostSteps }) => isNested && mostSteps > 0)
     .map((movable) => {
-      const count = helpful(movable.movedBy(movable.mostSteps));
-      return count === null ? null : givenUp(problem, movable, count);
+      const most = helpedTo(fillProblem(movable.movedBy(movable.mostSteps), problem), search);
+      return most && givenUp(problem, movable, most);
     });
   const flashes = FLASH_LIMITS.filter((limit) => hasFlashesFor(wish, limit)).map((limit) => {
-    const count = helpful(flashesMoved(wish, limit, mostMovedStops(wish, limit)));
-    return count === null ? null : flashesGivenUp(problem, limit, count);
+    const moved = flashesMoved(wish, limit, mostMovedStops(wish, limit));
+    const most = helpedTo(fillProblem(moved, problem), search);
+    return most && flashesGivenUp(problem, limit, most);
   });
   return [...cameras, ...flashes];
 }

@@ -1,7 +1,7 @@
 import { fillOutcome } from './fillOutcome';
 import type { FillProblem } from './fillProblem';
-import { largestMiss, onAimCount, OWN_WEIGHT } from './fillScore';
-import { bestFound, startSearch } from './fillSearch';
+import { largestMiss, OWN_WEIGHT } from './fillScore';
+import { bestFound, isOnAim, startSearch } from './fillSearch';
 import { exactSettingsOf, type FillAim, type FillRecipe, type FillWish } from './fillTypes';
 import type { CameraLimit, FlashLimit } from './limits';
 
@@ -44,6 +44,9 @@ export function bestOf(
   if (found === null) return null;
   const { recipe } = found;
   const outcome = fillOutcome({ ...changed, aim }, exactSettingsOf(recipe), recipe.sync, recipe.flashes);
-  const isOnAim = (search.least ?? 0) <= onAimCount(problem.grid);
-  return { recipe: { ...recipe, outcome }, leavesStops: isOnAim ? 0 : largestMiss(problem, recipe.outcome) };
+
+  return {
+    recipe: { ...recipe, outcome },
+    leavesStops: isOnAim(search) ? 0 : largestMiss(problem, recipe.outcome),
+  };
 }

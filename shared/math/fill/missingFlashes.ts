@@ -12,7 +12,7 @@ export function missingFlashes({ problem, least }: FillSearch): LimitInTheWay[] 
   const add = (limit: FillLimit, more: Partial<LimitInTheWay> = {}) =>
     missing.push({ limit, shortByStops: null, leavesStops: 0, recipe: null, ...more });
   const isRatioMissed = wish.aim.ratio !== null && !parts.ratio;
-  const needed = has('key') || has('fill') ? null : lightNeeded(problem, least ?? 0);
+  const needed = has('key') || has('fill') ? null : lightNeeded(problem, least?.main ?? 0);
   if (needed !== null || (isRatioMissed && !has('key'))) add('key_missing', needed ?? {});
   if (isRatioMissed && !has('fill')) add('fill_missing');
   if (wish.aim.rimStops !== null && !parts.rim) add('rim_missing');

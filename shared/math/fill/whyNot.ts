@@ -1,6 +1,5 @@
 import { aimsAsTheyAre, aimsGivenUp } from './aimsGivenUp';
-import { onAimCount } from './fillScore';
-import type { FillSearch } from './fillSearch';
+import { isOnAim, type FillSearch } from './fillSearch';
 import { gearGivenUp, gearThatHelps } from './gearGivenUp';
 import type { FillLimit, LimitInTheWay } from './limitInTheWay';
 import { missingFlashes } from './missingFlashes';
@@ -51,12 +50,11 @@ const present = (all: readonly (LimitInTheWay | null)[]) => all.filter((one) => 
  * @source exhaustive search with the limit moved; tested against going through every combination
  */
 export function whyNot(search: FillSearch): LimitInTheWay[] {
-  const { problem, least } = search;
-  const onAim = onAimCount(problem.grid);
+  const { problem } = search;
   const missing = missingFlashes(search);
-  if (least !== null && least <= onAim) return missing;
-  const enough = present(gearGivenUp(problem, onAim));
-  const nearer = enough.length > 0 ? [] : present(gearThatHelps(problem, least));
+  if (isOnAim(search)) return missing;
+  const enough = present(gearGivenUp(problem));
+  const nearer = enough.length > 0 ? [] : present(gearThatHelps(search));
   const all = [...enough, ...nearer, ...present(aimsGivenUp(search)), ...missing];
   return cheapestFirst(all.length > 0 ? all : aimsAsTheyAre(search));
 }
