@@ -3,6 +3,7 @@ import { version } from '../package.json';
 import { loadCalculators } from '../shared/calculators';
 import { createApp } from './app';
 import type { Config } from './config';
+import { closeHttpServer } from './http/closeHttpServer';
 import { createHttpServer } from './http/createHttpServer';
 import { buildOpenapi } from './openapi/buildOpenapi';
 import { accessLog } from './services/accessLog';
@@ -34,9 +35,6 @@ export interface Service {
   readonly url: string;
   stop(): Promise<void>;
 }
-
-/** How long calls under way may take to end when the service stops. */
-const DRAIN_MS = 5_000;
 
 /** Connects, listens, and gives back how to stop: no new calls, those under way end, counts are committed. */
 export async function serve(options: ServeOptions): Promise<Service> {
@@ -90,11 +88,7 @@ export async function serve(options: ServeOptions): Promise<Service> {
   });
   const { port } = server.address() as AddressInfo;
   const stop = async () => {
-    const closed = new Promise<void>((resolve) => server.close(() => resolve()));
-    server.closeIdleConnections();
-    const cut = setTimeout(() => server.closeAllConnections(), DRAIN_MS);
-    await closed;
-    clearTimeout(cut);
+    await closeHttpServer(server);
     await consoleSide.stop();
     await meter.close();
     await usage.close();
