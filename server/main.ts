@@ -44,7 +44,12 @@ export async function serve(options: ServeOptions): Promise<Service> {
   const pool = countingPool(serviceUrl, config.countingPoolSize, (error) => {
     logger.warn({ reason: error.message }, 'a counting connection ended');
   });
-  const meter = new GroupCommitMeter(pool, () => performance.now());
+  const meter = new GroupCommitMeter(
+    pool,
+    () => performance.now(),
+    ({ accountId, keyId, units }) =>
+      logger.error({ account: accountId, key: keyId, units }, 'units could not be given back'),
+  );
   const usageConnections = usagePool(serviceUrl, (error) => {
     logger.warn({ reason: error.message }, 'a usage connection ended');
   });

@@ -2,7 +2,8 @@ import { accountsAndKeys } from './0001-accounts-and-keys';
 import { metering } from './0002-metering';
 import { usage } from './0003-usage';
 import { consoleTables } from './0004-console';
+import { refunds } from './0007-refunds';
 import type { Migration } from './migration';
 
 /** All steps of the schema, in order. */
-export const migrations: readonly Migration[] = [accountsAndKeys, metering, usage, consoleTables];
+export const migrations: readonly Migration[] = [accountsAndKeys, metering, usage, consoleTables, refunds];

@@ -93,8 +93,9 @@ export async function serveMetered(
   }
   try {
     const answer = await ready.answer(decision.standing);
-    call.facts.units = units;
     sendJson(call, 200, [...limits, ...caching], answer, finish);
+    // Only now: an answer that can't be written costs nothing either.
+    call.facts.units = units;
   } catch (error) {
     meter.giveBack(decision.standing, units);
     onFault(call, error);

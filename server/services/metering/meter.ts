@@ -62,7 +62,7 @@ export class MeterUnavailable extends Error {
 export interface Meter {
   /** Decides one call, in order of arrival. @throws MeterUnavailable when the database can't be reached */
   take(ask: Ask): Promise<Decision>;
-  /** Gives units back for a call that we failed after granting it. */
+  /** Gives units back for a call that we failed after granting it, as soon as the database takes it. */
   giveBack(standing: Standing, units: number): void;
   /** Waits for what is under way and closes its connections. */
   close(): Promise<void>;
