@@ -22,7 +22,7 @@ function frontMiss(problem: FillProblem): number | null {
   let least: number | null = null;
   someNearBackground(problem, onAimCount(problem.grid), (lens, shutter) => {
     const { front, table } = caseOf(problem, lens, shutter);
-    const most = front.ambient + table.keyMost + table.fillMost;
+    const most = front.ambient + table.frontMost;
     const miss =
       front.ambient > front.wished
         ? Math.log2(front.ambient / front.wished)
@@ -34,7 +34,7 @@ function frontMiss(problem: FillProblem): number | null {
 }
 
 /** Farther off than this a background is none of the picture's any more. */
-const MOST_BACKGROUND_STOPS = 20;
+const MOST_BACKGROUND_STOPS = 10;
 
 /** The least by which the background has to be off for the flashes to be right, stops with its sign; null where never. */
 function backgroundRoom(problem: FillProblem): number | null {

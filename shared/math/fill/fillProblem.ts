@@ -1,8 +1,9 @@
-import { assignWithin, leastRatioCount, type FlashTask } from './assignFlashes';
+import { canDo } from './assignFlashes';
 import { cameraGrid, type CameraGrid, type GridLens, type GridShutter } from './cameraGrid';
 import { ABSENT_STOPS, countOf, mostAt } from './fillMisses';
 import type { FillWish } from './fillTypes';
 import { flashTables, type FlashTable } from './flashLevels';
+import type { FlashTask } from './flashMix';
 
 /** More than any miss, in parts of 1/120 stop: light spans less than 500 stops. */
 export const ANY_COUNT = 60_000;
@@ -44,21 +45,23 @@ export interface FillProblem {
  */
 export function fillProblem(wish: FillWish, before?: FillProblem): FillProblem {
   const has = (role: string) => wish.flashes.some((flash) => flash.role === role);
-  const flashes = wish.flashes.filter(({ role }) => role !== 'rim' || wish.aim.rimStops !== null);
+  const parts = {
+    ratio: wish.aim.ratio !== null && has('key') && has('fill'),
+    rim: wish.aim.rimStops !== null && has('rim'),
+  };
+  const flashes = parts.rim ? wish.flashes : wish.flashes.filter(({ role }) => role !== 'rim');
+  const ratio = parts.ratio ? wish.aim.ratio : null;
   const isSameCamera = before?.wish.camera === wish.camera;
-  const isSameRim = (before?.wish.aim.rimStops === null) === (wish.aim.rimStops === null);
   const isSameFlash =
     before?.wish.flashes === wish.flashes &&
     before.wish.camera.shutCurtainS === wish.camera.shutCurtainS &&
-    isSameRim;
+    before.parts.rim === parts.rim &&
+    (before.parts.ratio ? before.wish.aim.ratio : null) === ratio;
   return {
     wish,
     grid: before && isSameCamera ? before.grid : cameraGrid(wish.camera, before?.grid.shutters),
-    tableAt: before && isSameFlash ? before.tableAt : flashTables(flashes, wish.camera),
-    parts: {
-      ratio: wish.aim.ratio !== null && has('key') && has('fill'),
-      rim: wish.aim.rimStops !== null && has('rim'),
-    },
+    tableAt: before && isSameFlash ? before.tableAt : flashTables(flashes, wish.camera, ratio),
+    parts,
   };
 }
 
@@ -66,18 +69,6 @@ export function fillProblem(wish: FillWish, before?: FillProblem): FillProblem {
 export function backgroundMiss({ wish }: FillProblem, lens: GridLens, shutter: GridShutter): number {
   return wish.scene.backgroundEv100 - wish.aim.backgroundStops - lens.stops - shutter.tv;
 }
-
-/** The least by which key and fill miss a ratio, whatever their sum; known once for a table. */
-function leastRatioMiss(table: FlashTable, ratio: number): number {
-  const known = ratioMisses.get(table);
-  if (known?.ratio === ratio) return known.count;
-  const task = { ambient: 1, wished: 1, ratio, isNeeded: false };
-  const count = leastRatioCount(table.front, task);
-  ratioMisses.set(table, { ratio, count });
-  return count;
-}
-
-const ratioMisses = new WeakMap<FlashTable, { ratio: number; count: number }>();
 
 /** A case with what its flashes have to do, all in the light of the flash table: f/1, ISO 100, no filter. */
 export function caseOf(problem: FillProblem, lens: GridLens, shutter: GridShutter): FillCase {
@@ -110,8 +101,8 @@ export function caseOf(problem: FillProblem, lens: GridLens, shutter: GridShutte
 export function isWithin(one: FillCase, most: MissLimits, flash = most): boolean {
   if (one.backgroundCount > most.main) return false;
   const { front, rim, table } = one;
-  if (assignWithin(table.front, front, { sum: flash.main, ratio: flash.beside }) === null) return false;
-  return rim === null || assignWithin(table.rim, rim, { sum: flash.beside, ratio: flash.beside }) !== null;
+  if (!canDo(table.front, front, { sum: flash.main, ratio: flash.beside })) return false;
+  return rim === null || canDo(table.rim, rim, { sum: flash.beside, ratio: flash.beside });
 }
 
 /** Where the shutters from one Tv to another begin and end in a list that runs from slow to fast. */
@@ -172,7 +163,7 @@ export function someCase(
   most: MissLimits,
   visit: (lens: GridLens, shutter: GridShutter, bound: MissLimits) => boolean,
 ): boolean {
-  const { wish, parts, tableAt } = problem;
+  const { wish, parts } = problem;
   const factor = 2 ** Math.min(mostAt(most.main), MOST_ROOM_STOPS);
   const subject = 2 ** wish.aim.subjectStops;
   const ambient = 2 ** wish.scene.subjectEv100;
@@ -188,9 +179,8 @@ export function someCase(
     else if (full < subject) miss = Math.max(miss, Math.log2(subject / full));
     const main = countOf(miss);
     if (main > most.main) return false;
-    if (parts.ratio) bounds.ratio ??= leastRatioMiss(tableAt(shutter), wish.aim.ratio ?? 2);
     const weak = Math.min(ABSENT_STOPS, (wish.aim.rimStops ?? 0) - Math.log2(bounds.rim * lens.factor));
-    const beside = Math.max(bounds.ratio ?? 0, parts.rim && weak > 0 ? countOf(weak) : 0);
+    const beside = Math.max(bounds.ratio, parts.rim && weak > 0 ? countOf(weak) : 0);
     return beside <= most.beside && visit(lens, shutter, { main, beside });
   });
 }
@@ -199,11 +189,11 @@ export function someCase(
 interface ShutterBounds {
   readonly front: number;
   readonly rim: number;
-  ratio?: number;
+  readonly ratio: number;
 }
 
 function boundsAt({ tableAt }: FillProblem, shutter: GridShutter): ShutterBounds {
   const table = tableAt(shutter);
   const loss = 2 ** -shutter.lossStops;
-  return { front: (table.keyMost + table.fillMost) * loss, rim: table.rimMost * loss };
+  return { front: table.frontMost * loss, rim: table.rimMost * loss, ratio: table.ratioLeast ?? 0 };
 }

@@ -1,12 +1,5 @@
-import {
-  distancesFor,
-  easiestAssignment,
-  leastCount,
-  leastMisses,
-  type Allowed,
-  type Assignment,
-  type FlashTask,
-} from './assignFlashes';
+import { easiestAssignment, leastCount, leastMisses } from './assignFlashes';
+import { placeFlashes } from './placeFlashes';
 import { ABSENT_STOPS, countOf } from './fillMisses';
 import { fillOutcome } from './fillOutcome';
 import {
@@ -38,7 +31,6 @@ import {
   type SyncKind,
   type UsedFlash,
 } from './fillTypes';
-import type { FlashLevels } from './flashLevels';
 import { markAt } from '../marks';
 
 /** A case with its flashes set. */
@@ -197,18 +189,6 @@ export function isReachable(problem: FillProblem, most: MissLimits, flash = most
   return someCase(problem, most, (lens, shutter) => isWithin(caseOf(problem, lens, shutter), most, flash));
 }
 
-function setFlashes(
-  levels: readonly FlashLevels[],
-  task: FlashTask,
-  { chosen, allowed }: { chosen: Assignment; allowed: Allowed },
-): UsedFlash[] {
-  const distances = distancesFor(levels, task, chosen, allowed);
-  return levels.flatMap(({ flash, powers }, i) => {
-    const level = chosen[i] ?? 0;
-    return level === 0 ? [] : [{ flash, power: powers[level] ?? 1, distanceM: distances[i] ?? flash.nearM }];
-  });
-}
-
 /** In the order of the request, which is how people look for them. */
 function inRequestOrder(problem: FillProblem, used: readonly UsedFlash[]): UsedFlash[] {
   const { flashes } = problem.wish;
@@ -235,15 +215,15 @@ function solvedCase(problem: FillProblem, { one, cost }: KnownCase, limit: MissL
     onAim,
     Math.max(one.backgroundCount, frontLeast.sum, frontLeast.ratio, rimLeast ?? 0),
   );
-  const front = easiestAssignment(table.front, table.frontPowers, one.front, frontLeast, spare);
+  const front = easiestAssignment(table.front, one.front, frontLeast, spare);
   if (front === null) return null;
   const rim =
     one.rim && rimLeast !== null
-      ? easiestAssignment(table.rim, table.rimPowers, one.rim, { sum: rimLeast, ratio: rimLeast }, spare)
+      ? easiestAssignment(table.rim, one.rim, { sum: rimLeast, ratio: rimLeast }, spare)
       : null;
   const used = inRequestOrder(problem, [
-    ...setFlashes(table.front, one.front, front),
-    ...(one.rim && rim ? setFlashes(table.rim, one.rim, rim) : []),
+    ...placeFlashes(table.front, one.front, front),
+    ...(one.rim && rim ? placeFlashes(table.rim, one.rim, rim) : []),
   ]);
   const sync = used.length === 0 ? 'none' : one.shutter.sync;
   const settings = settingsAt(problem, one, one.lens.widest);

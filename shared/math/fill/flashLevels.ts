@@ -1,4 +1,7 @@
-import type { FillCamera, FillFlash } from './fillTypes';
+import { leastRatioCount } from './assignFlashes';
+import type { FillCamera, FillFlash, FlashRole } from './fillTypes';
+import type { FlashGroup } from './flashMix';
+import { roleSums, type RoleSums } from './roleSums';
 import { powersOf } from './powerSteps';
 import { pulseClipStops } from './pulseClip';
 import type { GridShutter } from './cameraGrid';
@@ -9,25 +12,23 @@ import type { GridShutter } from './cameraGrid';
  */
 export interface FlashLevels {
   readonly flash: FillFlash;
-  readonly isFill: boolean;
   /** 0 is off, then the fractions of full power, rising */
   readonly powers: readonly number[];
   readonly low: Float64Array;
   readonly high: Float64Array;
 }
 
-/** All flashes at one shutter, those of the front apart from the rim, in an order that the request does not decide. */
+/** All flashes at one shutter: those of the front, and the rim. */
 export interface FlashTable {
-  readonly front: readonly FlashLevels[];
-  readonly rim: readonly FlashLevels[];
-  /** every power that one of them can be set to, rising */
-  readonly frontPowers: readonly number[];
-  readonly rimPowers: readonly number[];
-  readonly keyMost: number;
-  readonly fillMost: number;
+  readonly front: FlashGroup;
+  readonly rim: FlashGroup;
+  /** what key and fill, and the rim, give at most */
+  readonly frontMost: number;
   readonly rimMost: number;
   /** what the flashes of the front give at full power when no shutter clips them */
   readonly frontWhole: number;
+  /** by how much the ratio is missed at least, whatever the sum; null where there is none; parts of 1/120 stop */
+  readonly ratioLeast: number | null;
 }
 
 /** More than a tube takes to light up, s. */
@@ -49,41 +50,43 @@ function levelsOf(
     low[i + 1] = 2 ** (stops - 2 * Math.log2(flash.farM));
     high[i + 1] = 2 ** (stops - 2 * Math.log2(flash.nearM));
   });
-  return { flash, isFill: flash.role === 'fill', powers: [0, ...rising], low, high };
+  return { flash, powers: [0, ...rising], low, high };
 }
 
 const wholeLight = ({ guideNumberM, nearM, lossStops }: FillFlash) =>
   2 ** (2 * Math.log2(guideNumberM / nearM) - lossStops);
 
-const most = (all: readonly FlashLevels[], isFill: boolean) =>
-  all.reduce((sum, one) => (one.isFill === isFill ? sum + (one.high[one.high.length - 1] ?? 0) : sum), 0);
+const mostOf = ({ reach }: RoleSums) => reach[reach.length - 1] ?? 0;
 
-const allPowers = (levels: readonly FlashLevels[]) =>
-  [...new Set(levels.flatMap(({ powers }) => powers.slice(1)))].sort((a, b) => a - b);
-
-function tableOf(levels: readonly FlashLevels[]): FlashTable {
-  const front = levels.filter(({ flash }) => flash.role !== 'rim');
-  const rim = levels.filter(({ flash }) => flash.role === 'rim');
+function tableOf(levels: readonly FlashLevels[], ratio: number | null): FlashTable {
+  const sums = (role: FlashRole) => roleSums(levels.filter(({ flash }) => flash.role === role));
+  const front = { keys: sums('key'), fills: sums('fill') };
+  const rim = { keys: sums('rim'), fills: roleSums([]) };
+  const inFront = [...front.keys.flashes, ...front.fills.flashes];
   return {
     front,
     rim,
-    frontPowers: allPowers(front),
-    rimPowers: allPowers(rim),
-    keyMost: most(front, false),
-    fillMost: most(front, true),
-    rimMost: most(rim, false),
-    frontWhole: front.reduce((sum, { flash }) => sum + wholeLight(flash), 0),
+    frontMost: mostOf(front.keys) + mostOf(front.fills),
+    rimMost: mostOf(rim.keys),
+    frontWhole: inFront.reduce((sum, { flash }) => sum + wholeLight(flash), 0),
+    ratioLeast: ratio === null ? null : leastRatioCount(front, ratio),
   };
 }
 
-/** Fills first, then the strongest, then by name, so that the order in the request changes nothing. */
+/** The strongest first, then by name, so that the order in the request changes nothing. */
 function inOwnOrder(flashes: readonly FillFlash[]): FillFlash[] {
   const strength = ({ guideNumberM, lossStops, nearM }: FillFlash) =>
     2 * Math.log2(guideNumberM / nearM) - lossStops;
-  const turn = ({ role }: FillFlash) => (role === 'fill' ? 0 : 1);
-  return [...flashes].sort(
-    (a, b) => turn(a) - turn(b) || strength(b) - strength(a) || (a.name < b.name ? -1 : 1),
-  );
+  return [...flashes].sort((a, b) => strength(b) - strength(a) || (a.name < b.name ? -1 : 1));
+}
+
+/** The shortest time that lets all pulses through whole, s; 0 where no duration is known. */
+export function wholeFromS(
+  flashes: readonly FillFlash[],
+  { shutCurtainS }: Pick<FillCamera, 'shutCurtainS'>,
+): number {
+  const longestS = Math.max(0, ...flashes.map(({ t05S }) => t05S ?? 0));
+  return longestS === 0 ? 0 : shutCurtainS + WHOLE_PULSE * longestS + MOST_RISE_S;
 }
 
 /**
@@ -92,11 +95,13 @@ function inOwnOrder(flashes: readonly FillFlash[]): FillFlash[] {
  *
  * @param flashes what there is
  * @param camera for the part of the exposure in which the frame is not wholly open
+ * @param ratio (key + fill):fill where one is wished and there are both
  * @returns the table for a shutter, made once and kept
  */
 export function flashTables(
   flashes: readonly FillFlash[],
-  camera: FillCamera,
+  camera: Pick<FillCamera, 'shutCurtainS'>,
+  ratio: number | null,
 ): (shutter: GridShutter) => FlashTable {
   const ordered = inOwnOrder(flashes);
   const powers = ordered.map((flash) => powersOf(flash.minPower, flash.powerStepStops));
@@ -107,16 +112,15 @@ export function flashTables(
           shutterS === null ? 0 : pulseClipStops(flash, power, shutterS, camera.shutCurtainS),
         ),
       ),
+      ratio,
     );
   const whole = make(null);
-  const none = tableOf([]);
-  const longestS = Math.max(0, ...flashes.map(({ t05S }) => t05S ?? 0));
-  // A rise of the tube stretches a cut-off pulse by no more than this.
-  const wholeFromS = camera.shutCurtainS + WHOLE_PULSE * longestS + MOST_RISE_S;
+  const none = tableOf([], ratio);
+  const fromS = wholeFromS(flashes, camera);
   const clipped = new Map<number, FlashTable>();
   return ({ sync, mark }) => {
     if (sync === 'none') return none;
-    if (sync === 'highSpeed' || longestS === 0 || mark.exact >= wholeFromS) return whole;
+    if (sync === 'highSpeed' || mark.exact >= fromS) return whole;
     const known = clipped.get(mark.exact) ?? make(mark.exact);
     clipped.set(mark.exact, known);
     return known;

@@ -1,0 +1,120 @@
+import { ABSENT_STOPS, mostAt } from './fillMisses';
+import { firstAtLeast, lastAtMost, type RoleSums } from './roleSums';
+
+/** What the flashes of one part have to do, in the light of the flash levels. */
+export interface FlashTask {
+  /** what is there already, and what is wished in all */
+  readonly ambient: number;
+  readonly wished: number;
+  /** (key + fill):fill; null where none is wished or there are not both */
+  readonly ratio: number | null;
+  /** nothing may be left out: without a flash the part is absent (a rim) */
+  readonly isNeeded: boolean;
+}
+
+/** The flashes that work on one part: keys, or rims, and the fills. */
+export interface FlashGroup {
+  readonly keys: RoleSums;
+  readonly fills: RoleSums;
+}
+
+/** Misses that are allowed for the sum of the light and for the ratio of key and fill; parts of 1/120 stop. */
+export interface Allowed {
+  readonly sum: number;
+  readonly ratio: number;
+}
+
+/** Bounds on key K and fill L for a miss: sumLow ≤ K + L ≤ sumHigh, ratioLow·L ≤ K ≤ ratioHigh·L. */
+export interface MixBounds {
+  readonly sumLow: number;
+  readonly sumHigh: number;
+  readonly ratioLow: number;
+  readonly ratioHigh: number;
+  readonly needsKey: boolean;
+  readonly needsFill: boolean;
+}
+
+/** Light that differs by less is the same; covers the rounding of a few additions. */
+export const SAME_LIGHT = 1e-12;
+/** Two to this is still a finite number beside light of any strength. */
+const MOST_STOPS = 500;
+
+const FREE = { ratioLow: 0, ratioHigh: Infinity, needsKey: false, needsFill: false };
+
+/** The bounds that misses in stops put on key and fill. */
+export function boundsFor(task: FlashTask, sumStops: number, ratioStops: number): MixBounds {
+  const { ambient, wished, ratio, isNeeded } = task;
+  if (isNeeded && sumStops >= ABSENT_STOPS) return { sumLow: 0, sumHigh: Infinity, ...FREE };
+  const factor = 2 ** Math.min(sumStops, MOST_STOPS);
+  // Each bound is wider by its own rounding, since lights may differ by any number of stops.
+  const sum = {
+    sumLow: wished * (1 / factor - SAME_LIGHT) - ambient,
+    sumHigh: wished * factor * (1 + SAME_LIGHT) - ambient,
+  };
+  if (ratio === null || ratioStops >= ABSENT_STOPS) return { ...sum, ...FREE, needsKey: isNeeded };
+  const ratioFactor = 2 ** ratioStops;
+  return {
+    ...sum,
+    ratioLow: Math.max(0, (ratio / ratioFactor) * (1 - SAME_LIGHT) - 1),
+    ratioHigh: ratio * ratioFactor * (1 + SAME_LIGHT) - 1,
+    needsKey: true,
+    needsFill: true,
+  };
+}
+
+/** The same from counted misses. */
+export const boundsWithin = (task: FlashTask, { sum, ratio }: Allowed): MixBounds =>
+  boundsFor(task, mostAt(sum), mostAt(ratio));
+
+const clamp = (value: number, low: number, high: number) => Math.min(high, Math.max(low, value));
+
+/**
+ * The keys that go with any fill from l1 to l2 within bounds. The bounds are a convex figure in the plane of key and
+ * fill, so the keys are everything from a least to a most; the least lies where both lower edges meet, or next to it,
+ * and so does the most.
+ *
+ * @returns [least, most]; crossed where no key goes with such a fill
+ */
+export function keysFor(b: MixBounds, l1: number, l2: number): readonly [number, number] {
+  const low = Math.max(l1, b.sumLow / (1 + b.ratioHigh));
+  const high = Math.min(l2, b.sumHigh / (1 + b.ratioLow));
+  if (low > high) return [1, 0];
+  const atLeast = clamp(b.sumLow / (1 + b.ratioLow), low, high);
+  const least = Math.max(0, b.sumLow - atLeast, b.ratioLow * atLeast);
+  // Without a bound on the ratio, the less there is of the fill, the more room is left for the key.
+  if (b.ratioHigh === Infinity) return [least, b.sumHigh - low];
+  const atMost = clamp(b.sumHigh / (1 + b.ratioHigh), low, high);
+  return [least, Math.min(b.sumHigh - atMost, b.ratioHigh * atMost)];
+}
+
+/** Whether any way to set the keys gives something from `least` to `most`. */
+export function hasKeyBetween(keys: RoleSums, least: number, most: number, needsKey: boolean): boolean {
+  const last = lastAtMost(keys.low, most);
+  // Off stands first, and an entry that is on is never below it.
+  return last >= (needsKey ? 1 : 0) && (keys.reach[last] ?? 0) >= least;
+}
+
+/** Goes through the ways to set the fills that bounds leave room for, each with its keys; true from `visit` ends it. */
+export function someFill(
+  { fills, keys }: FlashGroup,
+  b: MixBounds,
+  visit: (fill: number, leastKey: number, mostKey: number) => boolean,
+): boolean {
+  const keyMost = keys.reach[keys.reach.length - 1] ?? 0;
+  const least = Math.max(b.sumLow / (1 + b.ratioHigh), b.sumLow - keyMost);
+  const most = b.sumHigh / (1 + b.ratioLow);
+  for (let i = firstAtLeast(fills.reach, least); i < fills.low.length; i++) {
+    const low = fills.low[i] ?? 0;
+    if (low > most) break;
+    if ((fills.high[i] ?? 0) < least || (b.needsFill && (fills.used[i] ?? 0) === 0)) continue;
+    const [leastKey, mostKey] = keysFor(b, low, fills.high[i] ?? 0);
+    if (leastKey <= mostKey && visit(i, leastKey, mostKey)) return true;
+  }
+  return false;
+}
+
+/** Whether any way to set the flashes keeps within bounds. */
+export function isMixed(group: FlashGroup, b: MixBounds): boolean {
+  if (b.sumHigh < 0) return false;
+  return someFill(group, b, (_, least, most) => hasKeyBetween(group.keys, least, most, b.needsKey));
+}
