@@ -63,8 +63,12 @@ BEGIN
   END LOOP;
 
   IF true = ANY (a_is_new) THEN
+    -- A new month is no new burst: the bucket goes on from the month before, where there is one.
     INSERT INTO quota_periods (account_id, month, tokens, refilled_at)
-      SELECT s.id, v_month, s.burst, at FROM unnest(a_id, a_burst) s (id, burst) ORDER BY s.id ON CONFLICT DO NOTHING;
+      SELECT s.id, v_month, least(s.burst, coalesce(p.tokens, s.burst)), least(at, coalesce(p.refilled_at, at))
+      FROM unnest(a_id, a_burst) s (id, burst)
+      LEFT JOIN quota_periods p ON p.account_id = s.id AND p.month = (v_month - interval '1 month')::date
+      ORDER BY s.id ON CONFLICT DO NOTHING;
   END IF;
   IF n > 0 THEN
     FOR r IN SELECT q.account_id, q.used, q.tokens, q.refilled_at FROM quota_periods q
