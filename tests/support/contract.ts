@@ -31,6 +31,9 @@ export interface ApiDocument {
   readonly components: Record<string, Record<string, unknown>>;
 }
 
+/** Stands for every address that no operation answers. */
+const ELSEWHERE: OperationObject = { operationId: 'elsewhere', responses: {} };
+
 /** Headers that the document must name wherever an answer carries one. */
 const DOCUMENTED = [
   'ratelimit',
@@ -71,10 +74,7 @@ export class Contract {
     if (!template || !operation) {
       // Pages and files beside the API are no part of its contract.
       if (!seen.path.startsWith(`/${this.name === 'api' ? 'v1' : 'api'}/`)) return;
-      const isRefused =
-        seen.method === 'OPTIONS' || seen.method === 'HEAD' || [404, 405].includes(seen.status);
-      if (!isRefused) throw new Error(`${seen.method} ${seen.path} (${seen.status}) is not in the document`);
-      return;
+      return this.checkElsewhere(seen);
     }
     const response = this.resolve(operation.responses[String(seen.status)]);
     const where = `${seen.method} ${template.path} ${seen.status}`;
@@ -82,6 +82,19 @@ export class Contract {
     this.checkHeaders(where, response, seen);
     this.checkBody(where, operation, response, seen);
     this.exercised.add(`${operation.operationId} ${seen.status}`);
+  }
+
+  /** An address or a method that the document does not name is refused, as the document says of that status. */
+  private checkElsewhere(seen: Seen): void {
+    if (seen.method === 'OPTIONS' || seen.method === 'HEAD') return;
+    const where = `${seen.method} ${seen.path} (${seen.status})`;
+    const response = [404, 405].includes(seen.status)
+      ? this.resolve({ $ref: `#/components/responses/Problem${seen.status}` })
+      : undefined;
+    if (!response) throw new Error(`${where} is not in the document`);
+    this.checkHeaders(where, response, seen);
+    this.checkBody(where, ELSEWHERE, response, seen);
+    this.exercised.add(`${ELSEWHERE.operationId} ${seen.status}`);
   }
 
   private resolve(response: ResponseObject | undefined): ResponseObject | undefined {
