@@ -3,7 +3,7 @@ import type { Call } from './Call';
 export type HeaderList = string[];
 
 /** Headers of every answer of the API: nothing of ours may run, be framed or be guessed at. */
-export const API_HEADERS: Readonly<HeaderList> = [
+const API_HEADERS: Readonly<HeaderList> = [
   'X-Content-Type-Options',
   'nosniff',
   'Content-Security-Policy',

@@ -87,7 +87,7 @@ function problemResponse(status: number) {
 }
 
 /** The statuses that problems can have, in order. */
-export const PROBLEM_STATUSES = [...new Set(PROBLEM_CODES.map(statusOf))].sort((a, b) => a - b);
+const PROBLEM_STATUSES = [...new Set(PROBLEM_CODES.map(statusOf))].sort((a, b) => a - b);
 
 /** Problem details, the headers that answers carry, and the problem answers by status. */
 export function registerProblems(registry: OpenAPIRegistry): void {

@@ -97,7 +97,7 @@ function ofType(schema: z.ZodType, meta: FieldMeta): Partial<Field> {
 }
 
 /** Describes one schema as a field of the given name. */
-export function describeField(name: string, schema: z.ZodType): Field {
+function describeField(name: string, schema: z.ZodType): Field {
   const { schema: inner, meta, required, defaultValue } = peel(schema);
   return {
     name,

@@ -1,7 +1,7 @@
 import { ANY, inDomain, SMALLEST } from './domain';
 
 /** Reflected-light meter constant in cd·s·ISO/m², usual value; ISO 2720:1974 recommends 10.6 to 13.4. */
-export const REFLECTED_K = 12.5;
+const REFLECTED_K = 12.5;
 /** Incident-light meter constant in lx·s·ISO for a flat receptor, usual value; ISO 2720:1974: 240 to 400. */
 export const INCIDENT_C = 250;
 

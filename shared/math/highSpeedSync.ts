@@ -4,7 +4,7 @@ import { ANY, inDomain, SMALLEST } from './domain';
 const SAME_TIME = 1e-9;
 
 /** Usual travel of one curtain, s; stands in where the maker's is not known. Common practice, no source. */
-export const USUAL_CURTAIN_S = 1 / 300;
+const USUAL_CURTAIN_S = 1 / 300;
 
 /**
  * The curtain travel to assume: 1/300 s, or the sync speed where that is shorter, because at the sync speed the

@@ -18,7 +18,7 @@ const spans = new Map<string, number | null>();
  * @example zoneNamed('Europe/London')?.name // 'Europe/London'
  * @source the IANA time zone database as the runtime has it
  */
-export function zoneNamed(name: string): IANAZone | null {
+function zoneNamed(name: string): IANAZone | null {
   const kept = known.get(name);
   if (kept !== undefined) return kept;
   const zone = isName(name) ? IANAZone.create(canonical(name)) : null;

@@ -8,7 +8,7 @@ import { invalidInput } from './invalidInput';
 import type { Operation, Prepared } from './operation';
 
 const BODY_LIMIT = 2 * 1024 * 1024;
-export const BATCH_MAX = 1_000;
+const BATCH_MAX = 1_000;
 /** The event loop is given back this often, so that a batch holds up nobody. */
 const SLICE_MS = 10;
 

@@ -23,7 +23,7 @@ export interface V1Dependencies extends MeteredDependencies {
 type Table = Map<string, Partial<Record<string, Operation>>>;
 
 /** Every operation of the metered API, found by path and method. */
-export function v1Operations({ calculators, version, now, publicUrl }: V1Dependencies): Operation[] {
+function v1Operations({ calculators, version, now, publicUrl }: V1Dependencies): Operation[] {
   return [
     ...listOperations(calculators),
     usageOperation,

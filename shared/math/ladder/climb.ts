@@ -24,7 +24,7 @@ export interface Change {
  * @example stairFor([{ ev100: 5, ... }, { ev100: 4, ... }], 4.4) // 1
  * @source derivation
  */
-export function stairFor(stairs: readonly Stair[], ev100: number): number {
+function stairFor(stairs: readonly Stair[], ev100: number): number {
   let low = 0;
   let high = stairs.length - 1;
   while (low < high) {

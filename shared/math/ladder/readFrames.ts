@@ -66,7 +66,7 @@ export function readFrames(
 }
 
 /** EV100 of the scene by a test frame: the settings' plus how much brighter than a middle tone it came out. */
-export function evOfFrame(frame: LadderFrame): number {
+function evOfFrame(frame: LadderFrame): number {
   return sceneEv100(frame.aperture, frame.shutterS, frame.iso, frame.ndStops) + frame.offsetStops;
 }
 
