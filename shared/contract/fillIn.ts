@@ -1,7 +1,9 @@
 import { z } from 'zod';
+import { rolesWithTooManyWays } from '../math/fill/countWays';
 import { isFasterThanSync } from '../math/highSpeedSync';
 import { contradictionAt, type FoundContradiction } from './contradictionAt';
 import { exactlyOne } from './exactlyOne';
+import { fillWish } from './fillExact';
 import {
   cameraIn,
   flashFields,
@@ -125,12 +127,22 @@ function syncFaults(given: FillCheckIn): FoundContradiction[] {
   return isFaster ? [] : [{ code: 'high_speed_sync_for_faster', path: ['sync'], params }];
 }
 
+/** Flashes of one role that together can be set in more ways than are gone through. */
+function wayFaults(given: FillRecipesIn): FoundContradiction[] {
+  return rolesWithTooManyWays(fillWish(given)).map((params) => ({
+    code: 'too_many_power_settings' as const,
+    path: ['flashes'],
+    params: { ...params },
+  }));
+}
+
 /** Light, aim, camera and flashes, for which recipes are wanted. */
 export const fillRecipesIn = contradictionAt<typeof recipesFields>((given) => [
   ...cameraFaults(given),
   ...namesTwice(given.flashes),
   ...given.flashes.flatMap((flash, i) => placeFaults(flash, ['flashes', i])),
   ...focusFaults(given.view),
+  ...wayFaults(given),
 ])(recipesFields);
 
 /** The same with settings, which are to be worked out forward. */

@@ -1,4 +1,4 @@
-import { ABSENT_STOPS, countOf } from './fillMisses';
+import { ABSENT_COUNT } from './fillMisses';
 import {
   boundsWithin,
   isMixed,
@@ -45,7 +45,7 @@ export function leastCount(group: FlashGroup, task: FlashTask, most: number): nu
 /** The same for the ratio alone, whatever the sum; an absent ratio is missed by ten stops. */
 export function leastRatioCount(group: FlashGroup, ratio: number): number {
   const task = { ambient: 1, wished: 1, ratio, isNeeded: false };
-  return lowest(0, countOf(ABSENT_STOPS), (count) => canDo(group, task, { sum: ANY_SUM, ratio: count }));
+  return lowest(0, ABSENT_COUNT, (count) => canDo(group, task, { sum: ANY_SUM, ratio: count }));
 }
 
 /**
@@ -59,12 +59,11 @@ export function leastRatioCount(group: FlashGroup, ratio: number): number {
 export function leastMisses(group: FlashGroup, task: FlashTask, most: number, onAim: number): Allowed | null {
   const both = leastCount(group, task, Math.min(most, onAim));
   if (both !== null) return alike(both);
-  const absent = countOf(ABSENT_STOPS);
-  const withSum = (sum: number) => canDo(group, task, { sum, ratio: absent });
+  const withSum = (sum: number) => canDo(group, task, { sum, ratio: ABSENT_COUNT });
   if (!withSum(most)) return null;
   const sum = lowest(onAim, most, withSum);
   if (task.ratio === null) return alike(sum);
-  return { sum, ratio: lowest(onAim, absent, (ratio) => canDo(group, task, { sum, ratio })) };
+  return { sum, ratio: lowest(onAim, ABSENT_COUNT, (ratio) => canDo(group, task, { sum, ratio })) };
 }
 
 /** How flashes are set: the codes of their ways, and what was allowed for it. */

@@ -51,7 +51,7 @@ function positions(kind: MarkedKind, scale: Scale, low: number, high: number): r
 }
 
 /** How a flash is fired at a shutter, and what that takes. */
-export function syncAt(camera: FillCamera, shutterS: number): { sync: SyncKind; lossStops: number } {
+function syncAt(camera: FillCamera, shutterS: number): { sync: SyncKind; lossStops: number } {
   if (!isFasterThanSync(shutterS, camera.syncSpeedS)) return { sync: 'normal', lossStops: 0 };
   if (camera.highSpeedSync === null) return { sync: 'none', lossStops: 0 };
   const { curtainS, extraLossStops } = camera.highSpeedSync;

@@ -54,7 +54,19 @@ export function countOf(stops: number): number {
   return Math.max(0, Math.ceil(PARTS_A_STOP * Math.abs(stops) - ON_COUNT));
 }
 
+/** What an absent part counts. */
+export const ABSENT_COUNT = countOf(ABSENT_STOPS);
+
 /** The largest miss of so many parts, stops; the inverse of {@link countOf}. */
 export function mostAt(count: number): number {
   return (count + ON_COUNT) / PARTS_A_STOP;
+}
+
+/** Two to this is still a finite number beside light of any strength. */
+const MOST_STOPS = 500;
+const factors = Array.from({ length: ABSENT_COUNT + 1 }, (_, count) => 2 ** mostAt(count));
+
+/** The factor of light that so many parts of a miss are, which is asked for again and again. */
+export function factorAt(count: number): number {
+  return factors[count] ?? 2 ** Math.min(mostAt(count), MOST_STOPS);
 }

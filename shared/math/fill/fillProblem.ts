@@ -2,7 +2,7 @@ import { canDo } from './assignFlashes';
 import { cameraGrid, type CameraGrid, type GridLens, type GridShutter } from './cameraGrid';
 import { ABSENT_STOPS, countOf, mostAt } from './fillMisses';
 import type { FillWish } from './fillTypes';
-import { flashTables, type FlashTable } from './flashLevels';
+import { flashTables, type FlashTable, type FlashTables } from './flashLevels';
 import type { FlashTask } from './flashMix';
 
 /** More than any miss, in parts of 1/120 stop: light spans less than 500 stops. */
@@ -34,7 +34,7 @@ export interface FillCase {
 export interface FillProblem {
   readonly wish: FillWish;
   readonly grid: CameraGrid;
-  readonly tableAt: (shutter: GridShutter) => FlashTable;
+  readonly tables: FlashTables;
   /** which parts of the aim the flashes could serve at all; the others are missed by every recipe alike */
   readonly parts: { readonly ratio: boolean; readonly rim: boolean };
 }
@@ -52,15 +52,10 @@ export function fillProblem(wish: FillWish, before?: FillProblem): FillProblem {
   const flashes = parts.rim ? wish.flashes : wish.flashes.filter(({ role }) => role !== 'rim');
   const ratio = parts.ratio ? wish.aim.ratio : null;
   const isSameCamera = before?.wish.camera === wish.camera;
-  const isSameFlash =
-    before?.wish.flashes === wish.flashes &&
-    before.wish.camera.shutCurtainS === wish.camera.shutCurtainS &&
-    before.parts.rim === parts.rim &&
-    (before.parts.ratio ? before.wish.aim.ratio : null) === ratio;
   return {
     wish,
     grid: before && isSameCamera ? before.grid : cameraGrid(wish.camera, before?.grid.shutters),
-    tableAt: before && isSameFlash ? before.tableAt : flashTables(flashes, wish.camera, ratio),
+    tables: flashTables(flashes, wish.camera.shutCurtainS, ratio, before?.tables),
     parts,
   };
 }
@@ -72,14 +67,14 @@ export function backgroundMiss({ wish }: FillProblem, lens: GridLens, shutter: G
 
 /** A case with what its flashes have to do, all in the light of the flash table: f/1, ISO 100, no filter. */
 export function caseOf(problem: FillProblem, lens: GridLens, shutter: GridShutter): FillCase {
-  const { wish, parts, tableAt } = problem;
+  const { wish, parts, tables } = problem;
   const { aim, scene } = wish;
   const lossFactor = 2 ** shutter.lossStops;
   const unit = lossFactor / lens.factor;
   return {
     lens,
     shutter,
-    table: tableAt(shutter),
+    table: tables.at(shutter),
     front: {
       ambient: 2 ** scene.subjectEv100 * shutter.mark.exact * lossFactor,
       wished: 2 ** aim.subjectStops * unit,
@@ -106,7 +101,7 @@ export function isWithin(one: FillCase, most: MissLimits, flash = most): boolean
 }
 
 /** Where the shutters from one Tv to another begin and end in a list that runs from slow to fast. */
-export function shutterRange(
+function shutterRange(
   shutters: readonly GridShutter[],
   tvLow: number,
   tvHigh: number,
@@ -192,8 +187,8 @@ interface ShutterBounds {
   readonly ratio: number;
 }
 
-function boundsAt({ tableAt }: FillProblem, shutter: GridShutter): ShutterBounds {
-  const table = tableAt(shutter);
+function boundsAt({ tables }: FillProblem, shutter: GridShutter): ShutterBounds {
+  const table = tables.at(shutter);
   const loss = 2 ** -shutter.lossStops;
   return { front: table.frontMost * loss, rim: table.rimMost * loss, ratio: table.ratioLeast ?? 0 };
 }

@@ -88,7 +88,7 @@ export function leastOutcomeCost(one: FillCase, { prefer, weight }: FillObjectiv
 }
 
 /** The mean time over which the subject's light comes in: ambient light takes the shutter's, a pulse its own. */
-export function gatheringS(outcome: FillOutcome, sync: SyncKind, shutterS: number): number {
+function gatheringS(outcome: FillOutcome, sync: SyncKind, shutterS: number): number {
   const over = outcome.flashToAmbientStops;
   if (sync !== 'normal' || over === null) return shutterS;
   const share = 1 / (1 + 2 ** over);

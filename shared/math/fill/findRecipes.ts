@@ -9,7 +9,8 @@ import {
   settingCost,
   type FillObjective,
 } from './fillScore';
-import { bestFound, startSearch, type FillSearch, type Found } from './fillSearch';
+import { bestFound, type Found } from './bestFound';
+import { startSearch, type FillSearch } from './fillSearch';
 import type { FillPreference, FillRecipe, FillWish } from './fillTypes';
 
 /** Recipes that are given beside each other differ by this much in aperture, shutter or ISO; by the first, if so many are. */
@@ -23,7 +24,7 @@ const ALTERNATIVES: readonly FillPreference[] = ['deepFocus', 'frozen', 'battery
  * @param search what {@link startSearch} found
  * @returns recipes, as many as were asked for and there are
  */
-export function differentRecipes(search: FillSearch): FillRecipe[] {
+function differentRecipes(search: FillSearch): FillRecipe[] {
   const { wish } = search.problem;
   const own: FillObjective = { prefer: wish.prefer, weight: OWN_WEIGHT };
   const first = bestFound(search, own);

@@ -1,7 +1,7 @@
 import { leastRatioCount } from './assignFlashes';
-import type { FillCamera, FillFlash, FlashRole } from './fillTypes';
+import type { FillFlash, FlashRole, SyncKind } from './fillTypes';
 import type { FlashGroup } from './flashMix';
-import { roleSums, type RoleSums } from './roleSums';
+import { roleSums, scaledSums, type RoleSums } from './roleSums';
 import { powersOf } from './powerSteps';
 import { pulseClipStops } from './pulseClip';
 import type { GridShutter } from './cameraGrid';
@@ -58,21 +58,6 @@ const wholeLight = ({ guideNumberM, nearM, lossStops }: FillFlash) =>
 
 const mostOf = ({ reach }: RoleSums) => reach[reach.length - 1] ?? 0;
 
-function tableOf(levels: readonly FlashLevels[], ratio: number | null): FlashTable {
-  const sums = (role: FlashRole) => roleSums(levels.filter(({ flash }) => flash.role === role));
-  const front = { keys: sums('key'), fills: sums('fill') };
-  const rim = { keys: sums('rim'), fills: roleSums([]) };
-  const inFront = [...front.keys.flashes, ...front.fills.flashes];
-  return {
-    front,
-    rim,
-    frontMost: mostOf(front.keys) + mostOf(front.fills),
-    rimMost: mostOf(rim.keys),
-    frontWhole: inFront.reduce((sum, { flash }) => sum + wholeLight(flash), 0),
-    ratioLeast: ratio === null ? null : leastRatioCount(front, ratio),
-  };
-}
-
 /** The strongest first, then by name, so that the order in the request changes nothing. */
 function inOwnOrder(flashes: readonly FillFlash[]): FillFlash[] {
   const strength = ({ guideNumberM, lossStops, nearM }: FillFlash) =>
@@ -81,12 +66,58 @@ function inOwnOrder(flashes: readonly FillFlash[]): FillFlash[] {
 }
 
 /** The shortest time that lets all pulses through whole, s; 0 where no duration is known. */
-export function wholeFromS(
-  flashes: readonly FillFlash[],
-  { shutCurtainS }: Pick<FillCamera, 'shutCurtainS'>,
-): number {
+export function wholeFromS(flashes: readonly FillFlash[], shutCurtainS: number): number {
   const longestS = Math.max(0, ...flashes.map(({ t05S }) => t05S ?? 0));
   return longestS === 0 ? 0 : shutCurtainS + WHOLE_PULSE * longestS + MOST_RISE_S;
+}
+
+/** Whether a shutter takes the same share from every flash of a role at every power. */
+export function isClippedAlike(flashes: readonly FillFlash[]): boolean {
+  const [first] = flashes;
+  return flashes.every(
+    ({ t05S, control }) => t05S === first?.t05S && (t05S === null || control !== 'cutoff'),
+  );
+}
+
+/** The flashes of one role at each shutter: whole pulses, or what a shutter in normal sync lets through. */
+export interface RoleTable {
+  readonly flashes: readonly FillFlash[];
+  readonly at: (shutter: GridShutter) => RoleSums;
+}
+
+function roleTable(flashes: readonly FillFlash[], shutCurtainS: number): RoleTable {
+  const ordered = inOwnOrder(flashes);
+  const powers = ordered.map((flash) => powersOf(flash.minPower, flash.powerStepStops));
+  const make = (clipOf: (flash: FillFlash, power: number) => number) =>
+    roleSums(ordered.map((flash, i) => levelsOf(flash, powers[i] ?? [], (power) => clipOf(flash, power))));
+  const whole = make(() => 0);
+  const none = roleSums([]);
+  const fromS = wholeFromS(flashes, shutCurtainS);
+  const [first] = ordered;
+  const clippedAt = (shutterS: number) => {
+    const clipOf = (flash: FillFlash, power: number) => pulseClipStops(flash, power, shutterS, shutCurtainS);
+    return first && isClippedAlike(flashes) ? scaledSums(whole, 2 ** clipOf(first, 1)) : make(clipOf);
+  };
+  const clipped = new Map<number, RoleSums>();
+  const at = ({ sync, mark }: GridShutter) => {
+    if (sync === 'none') return none;
+    if (sync === 'highSpeed' || mark.exact >= fromS) return whole;
+    const known = clipped.get(mark.exact) ?? clippedAt(mark.exact);
+    clipped.set(mark.exact, known);
+    return known;
+  };
+  return { flashes, at };
+}
+
+const isSame = (a: readonly FillFlash[], b: readonly FillFlash[]) =>
+  a.length === b.length && a.every((flash, i) => flash === b[i]);
+
+/** What the flashes can give at each shutter, role by role. */
+export interface FlashTables {
+  readonly shutCurtainS: number;
+  readonly ratio: number | null;
+  readonly roles: Readonly<Record<FlashRole, RoleTable>>;
+  readonly at: (shutter: GridShutter) => FlashTable;
 }
 
 /**
@@ -94,35 +125,53 @@ export function wholeFromS(
  * the loss of high-speed sync is the same for all flashes and is left to the caller.
  *
  * @param flashes what there is
- * @param camera for the part of the exposure in which the frame is not wholly open
+ * @param shutCurtainS part of the exposure in which the frame is not wholly open, s
  * @param ratio (key + fill):fill where one is wished and there are both
- * @returns the table for a shutter, made once and kept
+ * @param before tables like these, of which roles that are the same are used again
+ * @returns the tables, each made once and kept
  */
 export function flashTables(
   flashes: readonly FillFlash[],
-  camera: Pick<FillCamera, 'shutCurtainS'>,
+  shutCurtainS: number,
   ratio: number | null,
-): (shutter: GridShutter) => FlashTable {
-  const ordered = inOwnOrder(flashes);
-  const powers = ordered.map((flash) => powersOf(flash.minPower, flash.powerStepStops));
-  const make = (shutterS: number | null) =>
-    tableOf(
-      ordered.map((flash, i) =>
-        levelsOf(flash, powers[i] ?? [], (power) =>
-          shutterS === null ? 0 : pulseClipStops(flash, power, shutterS, camera.shutCurtainS),
-        ),
-      ),
-      ratio,
-    );
-  const whole = make(null);
-  const none = tableOf([], ratio);
-  const fromS = wholeFromS(flashes, camera);
-  const clipped = new Map<number, FlashTable>();
-  return ({ sync, mark }) => {
-    if (sync === 'none') return none;
-    if (sync === 'highSpeed' || mark.exact >= fromS) return whole;
-    const known = clipped.get(mark.exact) ?? make(mark.exact);
-    clipped.set(mark.exact, known);
-    return known;
+  before?: FlashTables,
+): FlashTables {
+  const tableOf = (role: FlashRole) => {
+    const own = flashes.filter((flash) => flash.role === role);
+    const known = before?.roles[role];
+    const isKnown = known && before.shutCurtainS === shutCurtainS && isSame(known.flashes, own);
+    return isKnown ? known : roleTable(own, shutCurtainS);
+  };
+  const roles = { key: tableOf('key'), fill: tableOf('fill'), rim: tableOf('rim') };
+  const isSameAll = before?.ratio === ratio && ROLES.every((role) => before.roles[role] === roles[role]);
+  if (before && isSameAll) return before;
+  const known = new Map<number, FlashTable>();
+  const at = (shutter: GridShutter) => {
+    // A shutter may be used with another sync than before, once a camera's sync speed has changed.
+    const key = SYNCS.length * shutter.step + SYNCS.indexOf(shutter.sync);
+    const table = known.get(key) ?? tableAt(roles, shutter, ratio);
+    known.set(key, table);
+    return table;
+  };
+  return { shutCurtainS, ratio, roles, at };
+}
+
+const ROLES: readonly FlashRole[] = ['key', 'fill', 'rim'];
+const SYNCS: readonly SyncKind[] = ['normal', 'highSpeed', 'none'];
+const NO_FILL = roleSums([]);
+
+function tableAt(roles: FlashTables['roles'], shutter: GridShutter, ratio: number | null): FlashTable {
+  const front = { keys: roles.key.at(shutter), fills: roles.fill.at(shutter) };
+  const rim = { keys: roles.rim.at(shutter), fills: NO_FILL };
+  return {
+    front,
+    rim,
+    frontMost: mostOf(front.keys) + mostOf(front.fills),
+    rimMost: mostOf(rim.keys),
+    frontWhole: [...roles.key.flashes, ...roles.fill.flashes].reduce(
+      (sum, flash) => sum + wholeLight(flash),
+      0,
+    ),
+    ratioLeast: ratio === null ? null : leastRatioCount(front, ratio),
   };
 }

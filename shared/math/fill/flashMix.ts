@@ -1,4 +1,4 @@
-import { ABSENT_STOPS, mostAt } from './fillMisses';
+import { ABSENT_COUNT, factorAt } from './fillMisses';
 import { firstAtLeast, lastAtMost, type RoleSums } from './roleSums';
 
 /** What the flashes of one part have to do, in the light of the flash levels. */
@@ -35,26 +35,25 @@ export interface MixBounds {
 }
 
 /** Light that differs by less is the same; covers the rounding of a few additions. */
-export const SAME_LIGHT = 1e-12;
-/** Two to this is still a finite number beside light of any strength. */
-const MOST_STOPS = 500;
-
+const SAME_LIGHT = 1e-12;
 const FREE = { ratioLow: 0, ratioHigh: Infinity, needsKey: false, needsFill: false };
 
-/** The bounds that misses in stops put on key and fill. */
-export function boundsFor(task: FlashTask, sumStops: number, ratioStops: number): MixBounds {
+/**
+ * The bounds that misses put on key and fill.
+ * @param sumFactor by how much the sum may be off, as a factor of light; null for any sum, absent included
+ * @param ratioFactor the same for the ratio; null for any ratio, absent included
+ */
+export function boundsFor(task: FlashTask, sumFactor: number | null, ratioFactor: number | null): MixBounds {
   const { ambient, wished, ratio, isNeeded } = task;
-  if (isNeeded && sumStops >= ABSENT_STOPS) return { sumLow: 0, sumHigh: Infinity, ...FREE };
-  const factor = 2 ** Math.min(sumStops, MOST_STOPS);
+  if (sumFactor === null) return { sumLow: 0, sumHigh: Infinity, ...FREE };
   // Each bound is wider by its own rounding, since lights may differ by any number of stops.
-  const sum = {
-    sumLow: wished * (1 / factor - SAME_LIGHT) - ambient,
-    sumHigh: wished * factor * (1 + SAME_LIGHT) - ambient,
-  };
-  if (ratio === null || ratioStops >= ABSENT_STOPS) return { ...sum, ...FREE, needsKey: isNeeded };
-  const ratioFactor = 2 ** ratioStops;
+  const sumLow = wished * (1 / sumFactor - SAME_LIGHT) - ambient;
+  const sumHigh = wished * sumFactor * (1 + SAME_LIGHT) - ambient;
+  if (ratio === null || ratioFactor === null)
+    return { sumLow, sumHigh, ratioLow: 0, ratioHigh: Infinity, needsKey: isNeeded, needsFill: false };
   return {
-    ...sum,
+    sumLow,
+    sumHigh,
     ratioLow: Math.max(0, (ratio / ratioFactor) * (1 - SAME_LIGHT) - 1),
     ratioHigh: ratio * ratioFactor * (1 + SAME_LIGHT) - 1,
     needsKey: true,
@@ -62,9 +61,13 @@ export function boundsFor(task: FlashTask, sumStops: number, ratioStops: number)
   };
 }
 
-/** The same from counted misses. */
+/** The same from counted misses; a part that may miss by ten stops may be left out. */
 export const boundsWithin = (task: FlashTask, { sum, ratio }: Allowed): MixBounds =>
-  boundsFor(task, mostAt(sum), mostAt(ratio));
+  boundsFor(
+    task,
+    task.isNeeded && sum >= ABSENT_COUNT ? null : factorAt(sum),
+    ratio >= ABSENT_COUNT ? null : factorAt(ratio),
+  );
 
 const clamp = (value: number, low: number, high: number) => Math.min(high, Math.max(low, value));
 
@@ -88,7 +91,7 @@ export function keysFor(b: MixBounds, l1: number, l2: number): readonly [number,
 }
 
 /** Whether any way to set the keys gives something from `least` to `most`. */
-export function hasKeyBetween(keys: RoleSums, least: number, most: number, needsKey: boolean): boolean {
+function hasKeyBetween(keys: RoleSums, least: number, most: number, needsKey: boolean): boolean {
   const last = lastAtMost(keys.low, most);
   // Off stands first, and an entry that is on is never below it.
   return last >= (needsKey ? 1 : 0) && (keys.reach[last] ?? 0) >= least;

@@ -1,7 +1,8 @@
 import { assumedCurtainS } from '../highSpeedSync';
-import { ABSENT_STOPS, countOf } from './fillMisses';
+import { ABSENT_COUNT } from './fillMisses';
 import { ANY_COUNT, fillProblem, type FillProblem, type MissLimits } from './fillProblem';
 import { onAimCount } from './fillScore';
+import { flashShort } from './flashShort';
 import { isReachable, startSearch, type FillSearch } from './fillSearch';
 import type { FillWish } from './fillTypes';
 import { bestOf, type LimitInTheWay } from './limitInTheWay';
@@ -15,7 +16,6 @@ import {
   type MovableLimit,
 } from './limits';
 
-const HALVINGS = 12;
 /** Giving up a limit that brings less than this is no help. */
 const LEAST_HELP = 6;
 
@@ -53,23 +53,21 @@ function isAlone({ flashes }: FillWish, limit: FlashLimit): boolean {
   return flashes.filter(({ role }) => (role === 'rim') === isRim).length === 1;
 }
 
-/** How near (or far) flashes have to go, by halving; first for the aim itself, else for what still counts as on it. */
+/** A little more than is needed, so that rounding does not take it away again. */
+const ROUNDING_STOPS = 1e-9;
+
+/** How near (or far) flashes have to go: for the aim itself, where one alone decides it, else for what still counts as on it. */
 function flashesGivenUp(problem: FillProblem, limit: FlashLimit, most: MissLimits): LimitInTheWay | null {
   const { wish } = problem;
-  const mostStops = mostMovedStops(wish, limit);
-  if (!hasFlashesFor(wish, limit) || mostStops === 0) return null;
-  const reaches = (stops: number, flash: MissLimits) =>
-    isReachable(fillProblem(flashesMoved(wish, limit, stops), problem), most, flash);
-  if (!reaches(mostStops, most)) return null;
+  if (!hasFlashesFor(wish, limit)) return null;
   const exact = limit.startsWith('rim') ? { ...most, beside: 0 } : { ...most, main: 0 };
-  const flash = isAlone(wish, limit) && reaches(mostStops, exact) ? exact : most;
-  let [below, at] = [0, mostStops];
-  for (let i = 0; i < HALVINGS; i++) {
-    const middle = (below + at) / 2;
-    if (reaches(middle, flash)) at = middle;
-    else below = middle;
-  }
-  const best = bestOf(fillProblem(flashesMoved(wish, limit, at), problem), wish.aim);
+  const stopsFor = (flash: MissLimits) => flashShort(problem, limit, most, flash);
+  const exactly = isAlone(wish, limit) ? stopsFor(exact) : Infinity;
+  const stops = exactly <= mostMovedStops(wish, limit) ? exactly : stopsFor(most);
+  if (stops > mostMovedStops(wish, limit)) return null;
+  const moved = fillProblem(flashesMoved(wish, limit, stops + ROUNDING_STOPS), problem);
+  if (!isReachable(moved, most)) return null;
+  const best = bestOf(moved, wish.aim);
   return best && { limit, shortByStops: movedStops(wish, limit, best.recipe), ...best };
 }
 
@@ -119,16 +117,15 @@ export function gearGivenUp(problem: FillProblem): (LimitInTheWay | null)[] {
 /** The misses that would be a help, and with them those that a changed problem then reaches; null where it is none. */
 function helpedTo(changed: FillProblem, { least, problem }: FillSearch): MissLimits | null {
   const onAim = onAimCount(problem.grid);
-  const absent = countOf(ABSENT_STOPS);
   const isMainOff = least === null || least.main > onAim;
   const most = isMainOff
-    ? { main: least === null ? ANY_COUNT : least.main - LEAST_HELP, beside: absent }
+    ? { main: least === null ? ANY_COUNT : least.main - LEAST_HELP, beside: ABSENT_COUNT }
     : { main: onAim, beside: least.beside - LEAST_HELP };
   if (!isReachable(changed, most)) return null;
   const reached = startSearch(changed).least;
   if (reached === null) return null;
   return isMainOff
-    ? { main: Math.max(onAim, reached.main), beside: absent }
+    ? { main: Math.max(onAim, reached.main), beside: ABSENT_COUNT }
     : { main: onAim, beside: Math.max(onAim, reached.beside) };
 }
 

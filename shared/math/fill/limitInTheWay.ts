@@ -1,7 +1,8 @@
 import { fillOutcome } from './fillOutcome';
 import type { FillProblem } from './fillProblem';
 import { largestMiss, OWN_WEIGHT } from './fillScore';
-import { bestFound, isOnAim, startSearch } from './fillSearch';
+import { bestFound } from './bestFound';
+import { isOnAim, startSearch } from './fillSearch';
 import { exactSettingsOf, type FillAim, type FillRecipe, type FillWish } from './fillTypes';
 import type { CameraLimit, FlashLimit } from './limits';
 

@@ -1,4 +1,4 @@
-import { mostAt } from './fillMisses';
+import { ABSENT_COUNT, factorAt, mostAt } from './fillMisses';
 import type { UsedFlash } from './fillTypes';
 import type { Assignment } from './assignFlashes';
 import type { FlashLevels } from './flashLevels';
@@ -43,7 +43,12 @@ const HALVINGS = 60;
 function nearestMix(task: FlashTask, key: Span, fill: Span, allowed: Allowed): [number, number] {
   if (key.low === key.high && fill.low === fill.high) return [key.low, fill.low];
   const isAlike = allowed.sum === allowed.ratio;
-  const boundsAt = (stops: number) => boundsFor(task, stops, isAlike ? stops : mostAt(allowed.ratio));
+  const ratioFactor = allowed.ratio >= ABSENT_COUNT ? null : factorAt(allowed.ratio);
+  const isAbsent = task.isNeeded && allowed.sum >= ABSENT_COUNT;
+  const boundsAt = (stops: number) => {
+    const factor = 2 ** stops;
+    return boundsFor(task, isAbsent ? null : factor, isAlike && ratioFactor !== null ? factor : ratioFactor);
+  };
   const holds = (stops: number) => {
     const [least, most] = keysFor(boundsAt(stops), fill.low, fill.high);
     return least <= most && key.low <= most && key.high >= least;

@@ -19,10 +19,10 @@ export interface RoleSums {
 }
 
 /** Ways to set the powers of one role together; more are refused before it comes to this. */
-export const MOST_WAYS = 32_768;
+export const MOST_WAYS = 25_000;
 
 /** Low bits of a double that hold a way's place while its light is sorted; they change it by 1e-11 at most. */
-const PLACE_MASK = MOST_WAYS - 1;
+const PLACE_MASK = 32_767;
 
 /** The most that any entry up to each gives. */
 function reachOf(high: Float64Array): Float64Array {
@@ -30,7 +30,10 @@ function reachOf(high: Float64Array): Float64Array {
   return high.map((light) => (most = Math.max(most, light)));
 }
 
-/** The order of ways by their light: sorting plain doubles is many times quicker than sorting by a comparison. */
+/**
+ * The order of ways by their light: sorting plain doubles is many times quicker than sorting by a comparison. The low
+ * word of a double comes first on every processor that runs this.
+ */
 function placesByLight(light: Float64Array): Uint32Array {
   const keys = Float64Array.from(light);
   const words = new Uint32Array(keys.buffer);
@@ -88,6 +91,19 @@ function useOf(flashes: readonly FlashLevels[], code: Int32Array): Pick<RoleSums
     }
   }
   return { used, power };
+}
+
+/** The same ways with all light times a factor. */
+export function scaledSums(sums: RoleSums, factor: number): RoleSums {
+  const times = (light: number) => light * factor;
+  const flashes = sums.flashes.map((one) => ({ ...one, low: one.low.map(times), high: one.high.map(times) }));
+  return {
+    ...sums,
+    flashes,
+    low: sums.low.map(times),
+    high: sums.high.map(times),
+    reach: sums.reach.map(times),
+  };
 }
 
 const sparing = new WeakMap<RoleSums, RoleSums[]>();

@@ -91,7 +91,7 @@ export const recipesTooBright: Example<z.input<typeof fillRecipesIn>, z.output<t
             message: 'Ambient light does it alone; no flash is used.',
           },
         ],
-        score: 80003.33333333333,
+        score: 12000020000,
       },
     ],
     whyNot: [
