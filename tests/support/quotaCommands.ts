@@ -1,4 +1,4 @@
-import fc from 'fast-check';
+import type fc from 'fast-check';
 import { expect } from 'vitest';
 import { hashOfKey, newKey, shownPartsOf } from '../../server/services/keys/keyText';
 import type { ModelKey, QuotaModel, Verdict } from './quotaModel';

@@ -2,7 +2,7 @@ import pg from 'pg';
 
 /** Longer than any batch takes, shorter than a person waits: no call may hang beyond a second. */
 const STATEMENT_MS = 500;
-const ANSWER_MS = 700;
+const ANSWER_MS = 600;
 const CONNECT_MS = 300;
 
 /** Connections for counting alone, so that a slow query of the console can't hold up a call. */
