@@ -1,6 +1,7 @@
 import { nextTick } from 'vue';
 import { createRouter, createWebHistory } from 'vue-router';
 import { describePage } from './describePage';
+import { guardSession } from './guardSession';
 import { routes } from './routes';
 
 export const router = createRouter({
@@ -12,6 +13,8 @@ export const router = createRouter({
     return to.path === from.path ? false : { top: 0 };
   },
 });
+
+guardSession(router);
 
 router.afterEach((to, from, failure) => {
   if (failure || (to.path === from.path && from.matched.length > 0)) return;

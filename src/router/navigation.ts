@@ -11,6 +11,7 @@ export interface NavigationLine {
 
 const LINES: readonly NavigationLine[] = [
   { title: 'Calculators', to: '/calculators' },
+  { title: 'Keys', to: '/keys', roles: ['developer'] },
   { title: 'API reference', to: '/docs', isServed: true },
 ];
 

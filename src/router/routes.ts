@@ -1,13 +1,12 @@
 import type { RouteRecordRaw } from 'vue-router';
-import type { Role } from './navigation';
 
 declare module 'vue-router' {
   interface RouteMeta {
     /** The document's title; a view may say a closer one. */
     title?: string;
     description?: string;
-    /** Who may open it; everyone where nothing is said. */
-    roles?: readonly Role[];
+    /** Whether it belongs to an account, so that one signs in first. */
+    isOwn?: boolean;
   }
 }
 
@@ -36,6 +35,55 @@ export const routes: readonly RouteRecordRaw[] = [
     component: () => import('../views/CalculatorView.vue'),
     props: (route) => ({ id: `${String(route.params.group)}/${String(route.params.name)}` }),
     meta: { title: 'Calculator' },
+  },
+  {
+    path: '/sign-in',
+    name: 'signIn',
+    component: () => import('../views/SignInView.vue'),
+    meta: { title: 'Sign in' },
+  },
+  {
+    path: '/sign-up',
+    name: 'signUp',
+    component: () => import('../views/SignUpView.vue'),
+    meta: { title: 'Make an account' },
+  },
+  {
+    path: '/verify',
+    name: 'verify',
+    component: () => import('../views/VerifyView.vue'),
+    meta: { title: 'Confirm your address' },
+  },
+  {
+    path: '/reset',
+    name: 'reset',
+    component: () => import('../views/ResetView.vue'),
+    meta: { title: 'Password' },
+  },
+  {
+    path: '/confirm-email',
+    name: 'confirmEmail',
+    component: () => import('../views/ConfirmEmailView.vue'),
+    meta: { title: 'Confirm your new address' },
+  },
+  {
+    path: '/settings',
+    name: 'settings',
+    component: () => import('../views/SettingsView.vue'),
+    meta: { title: 'Settings', isOwn: true },
+  },
+  {
+    path: '/keys',
+    name: 'keys',
+    component: () => import('../views/KeysView.vue'),
+    meta: { title: 'Keys', isOwn: true },
+  },
+  {
+    path: '/keys/:id',
+    name: 'key',
+    component: () => import('../views/KeyView.vue'),
+    props: true,
+    meta: { title: 'Key', isOwn: true },
   },
   {
     path: '/:rest(.*)*',

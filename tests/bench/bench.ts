@@ -1,10 +1,11 @@
 import { BenchContext, type BenchOptions } from './BenchContext';
 import { lineText, type Measurement } from './benchLine';
+import { fillRecipesLines } from './fillRecipes';
 import { throughput } from './lines/throughput';
 
 export { runPart } from './parts/runPart';
 
-const measurements: readonly Measurement<BenchContext>[] = [throughput];
+const measurements: readonly Measurement<BenchContext>[] = [throughput, fillRecipesLines];
 
 /** Prints a line for each thing that is measured; with arguments, only those whose name holds one of them. */
 export async function runBench(options: BenchOptions): Promise<void> {

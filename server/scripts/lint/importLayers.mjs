@@ -76,6 +76,7 @@ const layers = [
   {
     of: 'server/openapi/writeDocuments.ts',
     may: [...server('openapi', 'routes/api'), ...DATA],
+    packages: ['openapi-typescript'],
   },
   {
     of: 'server/openapi/',

@@ -16,7 +16,7 @@ export function writeDocuments(documents: Documents): string[] {
 
 /** The documents that are missing, differ from what the code says, or that the code no longer makes. */
 export function staleDocuments(documents: Documents): string[] {
-  const present = existsSync(folder) ? readdirSync(folder).filter((name) => name.endsWith('.json')) : [];
+  const present = existsSync(folder) ? readdirSync(folder).filter((name) => /\.(json|ts)$/.test(name)) : [];
   const names = new Set([...present, ...Object.keys(documents)]);
   const isStale = (name: string) =>
     !present.includes(name) || readFileSync(join(folder, name), 'utf8') !== documents[name];

@@ -1,0 +1,20 @@
+/** A moment in the reader's own zone, which it names: 1 Dec 2026, 10:20 UTC. */
+export function formatMoment(iso: string | null): string {
+  if (iso === null) return '—';
+  return new Intl.DateTimeFormat('en-GB', {
+    year: 'numeric',
+    month: 'short',
+    day: 'numeric',
+    hour: '2-digit',
+    minute: '2-digit',
+    timeZoneName: 'short',
+  }).format(new Date(iso));
+}
+
+/** A day in the reader's own zone. */
+export function formatDay(iso: string | null): string {
+  if (iso === null) return '—';
+  return new Intl.DateTimeFormat('en-GB', { year: 'numeric', month: 'short', day: 'numeric' }).format(
+    new Date(iso),
+  );
+}
