@@ -23,6 +23,10 @@ const EVENTS: Readonly<Record<string, string>> = {
   signed_up: 'Account made',
 };
 
-export function eventText(event: string): string {
-  return EVENTS[event] ?? event.replaceAll('_', ' ');
+/** Nobody is signed in when these happen. */
+const BY_NOBODY: ReadonlySet<string> = new Set(['sign_in_failed', 'password_asked', 'password_set']);
+
+export function eventText(event: string, isByYou: boolean): string {
+  const text = EVENTS[event] ?? event.replaceAll('_', ' ');
+  return isByYou || BY_NOBODY.has(event) ? text : `${text}, not by you`;
 }
