@@ -380,6 +380,91 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/api/keys/{id}/log": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /** The recent calls of a key, the latest first, a page at a time */
+        get: operations["ReadKeyLog"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/api/usage": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /** Calls and units by day (UTC), calculator, key and class of status, and the month’s pace */
+        get: operations["ReadUsage"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/api/plan": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /** The plan, what is left of the month, the other plans, and what was asked for */
+        get: operations["ReadPlan"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/api/plan/requests": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /** Ask for another plan, with a reason; an administrator answers */
+        post: operations["AskForPlan"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/api/plan/requests/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        post?: never;
+        /** Take a wish back that has no answer yet */
+        delete: operations["WithdrawPlanRequest"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
 }
 export type webhooks = Record<string, never>;
 export interface components {
@@ -397,7 +482,7 @@ export interface components {
             /** @description the request id, as a URN */
             instance: string;
             /** @enum {string} */
-            code: "malformed_json" | "malformed_request" | "key_missing" | "key_invalid" | "key_expired" | "key_revoked" | "session_missing" | "session_ended" | "credentials_wrong" | "not_same_origin" | "role_missing" | "password_wrong" | "origin_not_allowed" | "server_key_in_browser" | "scope_missing" | "account_blocked" | "not_found" | "method_not_allowed" | "already_made" | "key_settled" | "too_many_keys" | "link_not_valid" | "too_large" | "unsupported_media_type" | "invalid_input" | "rate_limited" | "too_many_attempts" | "quota_exhausted" | "key_cap_reached" | "internal_error" | "unavailable";
+            code: "malformed_json" | "malformed_request" | "key_missing" | "key_invalid" | "key_expired" | "key_revoked" | "session_missing" | "session_ended" | "credentials_wrong" | "not_same_origin" | "role_missing" | "password_wrong" | "origin_not_allowed" | "server_key_in_browser" | "scope_missing" | "account_blocked" | "not_found" | "method_not_allowed" | "already_made" | "request_waiting" | "key_settled" | "too_many_keys" | "link_not_valid" | "too_large" | "unsupported_media_type" | "invalid_input" | "rate_limited" | "too_many_attempts" | "quota_exhausted" | "key_cap_reached" | "internal_error" | "unavailable";
             /** @description every fault of the input */
             errors?: {
                 /** @description JSON Pointer into the body, or /name of a query field */
@@ -472,7 +557,7 @@ export interface components {
                 "application/problem+json": components["schemas"]["Problem"];
             };
         };
-        /** @description `already_made`, `key_settled`, `too_many_keys` */
+        /** @description `already_made`, `request_waiting`, `key_settled`, `too_many_keys` */
         Problem409: {
             headers: {
                 "X-Request-Id": components["headers"]["X-Request-Id"];
@@ -1309,6 +1394,18 @@ export interface operations {
                             revokedAt: string | null;
                             replacedBy: string | null;
                         }[];
+                        planRequests: {
+                            /** Format: uuid */
+                            id: string;
+                            planId: string;
+                            reason: string;
+                            /** @enum {string} */
+                            state: "open" | "granted" | "declined";
+                            answer: string | null;
+                            /** Format: date-time */
+                            createdAt: string;
+                            answeredAt: string | null;
+                        }[];
                         sessions: {
                             /** Format: uuid */
                             id: string;
@@ -2064,6 +2161,333 @@ export interface operations {
             403: components["responses"]["Problem403"];
             404: components["responses"]["Problem404"];
             409: components["responses"]["Problem409"];
+            413: components["responses"]["Problem413"];
+            415: components["responses"]["Problem415"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    ReadKeyLog: {
+        parameters: {
+            query?: {
+                before?: string;
+                status?: "2xx" | "3xx" | "4xx" | "5xx";
+                calculator?: "exposure/value" | "exposure/solve" | "exposure/equivalents" | "exposure/difference" | "exposure/long" | "exposure/handheld" | "exposure/depth" | "light/convert" | "light/scenes" | "light/add" | "light/ratio" | "light/flicker" | "filters/density" | "filters/gel" | "flash/exposure" | "flash/measured" | "flash/falloff" | "flash/duration" | "flash/motion" | "flash/daylight" | "flash/budget" | "fill/recipes" | "fill/check" | "batch" | "usage";
+            };
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The recent calls of a key, the latest first, a page at a time */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        calls: {
+                            /** Format: date-time */
+                            at: string;
+                            calculator: string;
+                            status: number;
+                            /** @description of the problem; null where there was none */
+                            code: string | null;
+                            units: number;
+                            ms: number;
+                            requestId: string;
+                        }[];
+                        next: string | null;
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            404: components["responses"]["Problem404"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    ReadUsage: {
+        parameters: {
+            query?: {
+                from?: string;
+                to?: string;
+                keyId?: string;
+            };
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Calls and units by day (UTC), calculator, key and class of status, and the month’s pace */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        /** Format: date */
+                        from: string;
+                        /** Format: date */
+                        to: string;
+                        total: {
+                            calls: number;
+                            units: number;
+                            /** @description answered with 4xx */
+                            refused: number;
+                            /** @description answered with 5xx */
+                            failed: number;
+                            p50Ms: number | null;
+                            p95Ms: number | null;
+                        };
+                        /** @description each day of the span */
+                        days: {
+                            /** Format: date */
+                            day: string;
+                            calls: number;
+                            units: number;
+                            /** @description answered with 4xx */
+                            refused: number;
+                            /** @description answered with 5xx */
+                            failed: number;
+                            p50Ms: number | null;
+                            p95Ms: number | null;
+                        }[];
+                        calculators: {
+                            calculator: string;
+                            calls: number;
+                            units: number;
+                            /** @description answered with 4xx */
+                            refused: number;
+                            /** @description answered with 5xx */
+                            failed: number;
+                            p50Ms: number | null;
+                            p95Ms: number | null;
+                        }[];
+                        keys: {
+                            /** Format: uuid */
+                            keyId: string;
+                            name: string;
+                            calls: number;
+                            units: number;
+                            /** @description answered with 4xx */
+                            refused: number;
+                            /** @description answered with 5xx */
+                            failed: number;
+                            p50Ms: number | null;
+                            p95Ms: number | null;
+                        }[];
+                        statuses: {
+                            statusClass: number;
+                            calls: number;
+                            units: number;
+                            /** @description answered with 4xx */
+                            refused: number;
+                            /** @description answered with 5xx */
+                            failed: number;
+                            p50Ms: number | null;
+                            p95Ms: number | null;
+                        }[];
+                        /** @description of this month and the whole account, whatever the span */
+                        pace: {
+                            used: number;
+                            limit: number;
+                            /** @description units at the month’s end if it goes on like this */
+                            forecast: number;
+                            runsOutAt: string | null;
+                            /** Format: date-time */
+                            resetsAt: string;
+                        };
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            404: components["responses"]["Problem404"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    ReadPlan: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The plan, what is left of the month, the other plans, and what was asked for */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        standing: {
+                            plan: {
+                                id: string;
+                                title: string;
+                                unitsPerMonth: number;
+                                ratePerSecond: number;
+                                burst: number;
+                            };
+                            quota: {
+                                used: number;
+                                limit: number;
+                                remaining: number;
+                                /** Format: date-time */
+                                resetsAt: string;
+                            };
+                        };
+                        plans: {
+                            id: string;
+                            title: string;
+                            unitsPerMonth: number;
+                            ratePerSecond: number;
+                            burst: number;
+                        }[];
+                        /** @description what was asked for, the latest first */
+                        requests: {
+                            /** Format: uuid */
+                            id: string;
+                            planId: string;
+                            reason: string;
+                            /** @enum {string} */
+                            state: "open" | "granted" | "declined";
+                            answer: string | null;
+                            /** Format: date-time */
+                            createdAt: string;
+                            answeredAt: string | null;
+                        }[];
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    AskForPlan: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                "application/json": {
+                    /** Plan */
+                    planId: string;
+                    /** Reason */
+                    reason: string;
+                };
+            };
+        };
+        responses: {
+            /** @description Ask for another plan, with a reason; an administrator answers */
+            201: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        standing: {
+                            plan: {
+                                id: string;
+                                title: string;
+                                unitsPerMonth: number;
+                                ratePerSecond: number;
+                                burst: number;
+                            };
+                            quota: {
+                                used: number;
+                                limit: number;
+                                remaining: number;
+                                /** Format: date-time */
+                                resetsAt: string;
+                            };
+                        };
+                        plans: {
+                            id: string;
+                            title: string;
+                            unitsPerMonth: number;
+                            ratePerSecond: number;
+                            burst: number;
+                        }[];
+                        /** @description what was asked for, the latest first */
+                        requests: {
+                            /** Format: uuid */
+                            id: string;
+                            planId: string;
+                            reason: string;
+                            /** @enum {string} */
+                            state: "open" | "granted" | "declined";
+                            answer: string | null;
+                            /** Format: date-time */
+                            createdAt: string;
+                            answeredAt: string | null;
+                        }[];
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            409: components["responses"]["Problem409"];
+            413: components["responses"]["Problem413"];
+            415: components["responses"]["Problem415"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    WithdrawPlanRequest: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Take a wish back that has no answer yet */
+            204: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            404: components["responses"]["Problem404"];
             413: components["responses"]["Problem413"];
             415: components["responses"]["Problem415"];
             422: components["responses"]["Problem422"];

@@ -14,6 +14,8 @@ const EVENTS: Readonly<Record<string, string>> = {
   password_asked: 'New password asked for',
   password_changed: 'Password changed',
   password_set: 'Password set by a mailed link',
+  plan_asked: 'Another plan asked for',
+  plan_wish_withdrawn: 'Wish for a plan taken back',
   profile_changed: 'Name or measure changed',
   roles_changed: 'Roles changed',
   session_ended: 'Session ended',

@@ -5,9 +5,11 @@ import { changeKeyRoute, keyRoute, keysRoute, makeKeyRoute } from './keys';
 import { changeMeRoute, eventsRoute, meRoute, rolesRoute } from './me';
 import { askForPasswordRoute, setPasswordRoute } from './passwordReset';
 import type { Route } from './route';
+import { askForPlanRoute, planRoute, withdrawPlanRequestRoute } from './plan';
 import { refreshRoute, sessionStateRoute, signInRoute, signOutRoute } from './session';
 import { endOtherSessionsRoute, endSessionRoute, sessionsRoute } from './sessions';
 import { confirmSignUpRoute, signUpRoute } from './signUp';
+import { keyLogRoute, usageRoute } from './usage';
 
 /** Every address of the console's API. */
 export const consoleRoutes: readonly Route[] = [
@@ -39,4 +41,9 @@ export const consoleRoutes: readonly Route[] = [
   revokeKeyRoute,
   claimKeyRoute,
   passRoute,
+  keyLogRoute,
+  usageRoute,
+  planRoute,
+  askForPlanRoute,
+  withdrawPlanRequestRoute,
 ];

@@ -5,11 +5,13 @@ import { eventSchema, presentEvent } from '../../presenters/auditEvent';
 import { presentSession, sessionSchema } from '../../presenters/session';
 import { audit } from '../../services/audit/audit';
 import { allEventsOf } from '../../services/audit/eventsOf';
+import { planRequestsOf } from '../../services/accounts/planRequests';
 import { accountStanding } from '../../services/accounts/standing';
 import { usageMonths } from '../../services/accounts/usageMonths';
 import { ownKeys } from '../../services/keys/ownKeys';
 import { sessionsOf } from '../../services/sessions/sessionsOf';
 import { shown } from './keys';
+import { presentRequest, requestSchema } from './plan';
 import { closedRoute, type Route } from './route';
 
 export const exportRoute: Route = closedRoute({
@@ -27,6 +29,7 @@ export const exportRoute: Route = closedRoute({
     standing: standingSchema,
     usage: z.array(z.strictObject({ month: z.string(), units: z.int() })),
     keys: z.array(keySchema),
+    planRequests: z.array(requestSchema),
     sessions: z.array(sessionSchema),
     events: z.array(eventSchema),
   }),
@@ -37,6 +40,7 @@ export const exportRoute: Route = closedRoute({
     await audit(database, origin, { event: 'data_exported', accountId: account.id });
     const standing = await accountStanding(database, account.id);
     const keys = await ownKeys(database, account.id);
+    const planRequests = await planRequestsOf(database, account.id);
     const sessions = await sessionsOf(database, account.id);
     const events = await allEventsOf(database, account.id);
     visit.setHeader('Content-Disposition', 'attachment; filename="evenfall-account.json"');
@@ -46,6 +50,7 @@ export const exportRoute: Route = closedRoute({
       standing: presentStanding(standing),
       usage: await usageMonths(database, account.id),
       keys: keys.map(shown),
+      planRequests: planRequests.map(presentRequest),
       sessions: sessions.map((session) => presentSession(session, sessionId)),
       events: events.map(presentEvent),
     };

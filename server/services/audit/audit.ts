@@ -21,6 +21,8 @@ export type AuditName =
   | 'key_revoked'
   | 'key_claimed'
   | 'pass_given'
+  | 'plan_asked'
+  | 'plan_wish_withdrawn'
   | 'data_exported'
   | 'account_closed';
 

@@ -18,4 +18,9 @@ export const account = {
   expiry_in_past: () => 'The expiry must lie in the future.',
   id_not_valid: () => 'This is not an id that we give.',
   cursor_not_valid: () => 'This is not a place in the list that we gave.',
+  span_not_valid: (p: { maximum: number }) =>
+    `The last day must not lie before the first, and at most ${p.maximum} days may be asked for.`,
+  reason_not_valid: () => 'Say in 10 to 2,000 characters what the plan is needed for.',
+  plan_not_valid: (p: { plans: readonly string[] }) =>
+    `Choose one of the other plans: ${p.plans.join(', ')}.`,
 } as const;

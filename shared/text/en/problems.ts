@@ -115,6 +115,12 @@ export const problems = {
     cause: 'A key was made under the same Idempotency-Key; a key is shown once, so it can’t be shown again.',
     cure: 'Use the key that was shown then. If it is lost, revoke it and make another under a new Idempotency-Key.',
   },
+  request_waiting: {
+    status: 409,
+    title: 'A wish is waiting already',
+    cause: 'Another plan was asked for, and that has no answer yet.',
+    cure: 'Wait for the answer, or take the wish back on the plan page.',
+  },
   key_settled: {
     status: 409,
     title: 'The key is past that',

@@ -14,6 +14,12 @@ beforeAll(async () => {
   stranger = await service.person();
   const made = await owner.browser.call('POST', '/api/keys', { name: 'Mine' });
   owned['/api/keys'] = (made.body as unknown as { key: { id: string } }).key.id;
+  const asked = await owner.browser.call('POST', '/api/plan/requests', {
+    planId: 'studio',
+    reason: 'Many calls.',
+  });
+  owned['/api/plan/requests'] =
+    (asked.body as unknown as { requests: { id: string }[] }).requests[0]?.id ?? '';
   const { sessions } = (await owner.browser.call('GET', '/api/sessions')).body as unknown as {
     sessions: { id: string }[];
   };
@@ -35,7 +41,7 @@ const named = consoleRoutes.filter(({ path }) => path.includes(':id'));
 
 describe('what belongs to another account', () => {
   it('covers every route that names something', () => {
-    expect(named.length).toBe(7);
+    expect(named.length).toBe(9);
     for (const { path } of named) expect(owned[path.split('/:id')[0] ?? '']).toBeTruthy();
   });
 
@@ -59,12 +65,20 @@ describe('what belongs to another account', () => {
   });
 
   it('shows in no list and in no export', async () => {
-    for (const path of ['/api/keys', '/api/sessions', '/api/me', '/api/me/events', '/api/me/export']) {
+    const lists = ['/api/keys', '/api/sessions', '/api/me', '/api/me/events', '/api/me/export'];
+    for (const path of [...lists, '/api/usage', '/api/plan']) {
       const { text, status } = await stranger.browser.call('GET', path);
       expect(status).toBe(200);
       for (const secret of [...Object.values(owned), owner.email, owner.id])
         expect(text).not.toContain(secret);
     }
+  });
+
+  it('is no key to ask the usage of', async () => {
+    const ask = (id: string | undefined) => stranger.browser.call('GET', `/api/usage?keyId=${id}`);
+    const answers = [await ask(owned['/api/keys']), await ask(NOBODYS)];
+    expect(answers[0]?.status).toBe(404);
+    expect(bare(answers[0] as Answer)).toEqual(bare(answers[1] as Answer));
   });
 
   it('is left alone when a stranger ends all other sessions or closes the account', async () => {
