@@ -33,6 +33,14 @@ function frontMiss(problem: FillProblem): number | null {
   return least;
 }
 
+/** Whether ambient light alone makes the subject too bright wherever the background comes out so, give or take some room. */
+function isTooBright({ scene, aim }: FillWish, backgroundStops: number, roomStops: number): boolean {
+  const ambientStops = scene.subjectEv100 - scene.backgroundEv100 + backgroundStops;
+  return ambientStops - roomStops > aim.subjectStops + ROUNDING_STOPS;
+}
+
+const ROUNDING_STOPS = 1e-6;
+
 /** Farther off than this a background is none of the picture's any more. */
 const MOST_BACKGROUND_STOPS = 10;
 
@@ -45,6 +53,7 @@ function backgroundRoom(problem: FillProblem): number | null {
     let best: number | null = null;
     for (const sign of [1, -1]) {
       const shifted = wish.aim.backgroundStops + (sign * ring) / grid.steps;
+      if (isTooBright(wish, shifted, 2 * halfStep(grid))) continue;
       const moved = { ...problem, wish: withAim(wish, { backgroundStops: shifted }) };
       someCase(moved, most, (lens, shutter) => {
         const miss = backgroundMiss(problem, lens, shutter);

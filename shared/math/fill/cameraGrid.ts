@@ -58,15 +58,23 @@ function syncAt(camera: FillCamera, shutterS: number): { sync: SyncKind; lossSto
   return { sync: 'highSpeed', lossStops: Math.log1p(curtainS / shutterS) / Math.LN2 + extraLossStops };
 }
 
-function shuttersOf(camera: FillCamera, before: readonly GridShutter[]): GridShutter[] {
+/** Naming a mark takes longer than anything else here; there are a few hundred of them. */
+const named = new Map<string, Mark>();
+
+function shutterAt(scale: Scale, position: number): Mark {
+  const key = `${scale} ${position}`;
+  const mark = named.get(key) ?? markAt('shutter', scale, position);
+  named.set(key, mark);
+  return mark;
+}
+
+function shuttersOf(camera: FillCamera): GridShutter[] {
   const { scale, shutterSlowestS, shutterFastestS } = camera;
   // The slowest time stands at the lowest position.
   const [low, high] = positions('shutter', scale, shutterSlowestS, shutterFastestS);
-  const known = new Map(before.map(({ step, mark }) => [step, mark]));
   const shutters: GridShutter[] = [];
   for (let position = low; position <= high; position++) {
-    // Naming a mark takes longer than anything else here.
-    const mark = known.get(position) ?? markAt('shutter', scale, position);
+    const mark = shutterAt(scale, position);
     // Beyond the slowest marking a step is given in whole seconds, which may lie just beyond the limit.
     if (mark.exact > shutterSlowestS * (1 + EDGE)) continue;
     shutters.push({ step: position, mark, tv: -Math.log2(mark.exact), ...syncAt(camera, mark.exact) });
@@ -96,13 +104,12 @@ function lensesOf(
  * All marks that lie within a camera's limits. Times beyond 30 s are the scale's steps in whole seconds.
  *
  * @param camera limits, filters, sync
- * @param before shutters of the same scale that are known already
  * @returns the grid; empty parts where a limit leaves no mark
  * @throws RangeError when a limit is no positive number
  * @example f/2.8 to f/4 in thirds: positions 9 to 12
  * @source ISO 516, ISO 517 and trade practice for the marks; derivation
  */
-export function cameraGrid(camera: FillCamera, before: readonly GridShutter[] = []): CameraGrid {
+export function cameraGrid(camera: FillCamera): CameraGrid {
   const { scale } = camera;
   const steps = stepsPerStop(scale);
   const aperture = positions('aperture', scale, camera.apertureMin, camera.apertureMax);
@@ -112,7 +119,7 @@ export function cameraGrid(camera: FillCamera, before: readonly GridShutter[] = 
     steps,
     aperture,
     iso,
-    shutters: shuttersOf(camera, before),
+    shutters: shuttersOf(camera),
     lenses: lensesOf(aperture, iso, camera.ndStops, steps),
   };
 }

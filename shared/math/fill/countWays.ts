@@ -5,7 +5,7 @@ import { powersOf } from './powerSteps';
 import { MOST_WAYS } from './roleSums';
 
 /** Ways of one role over all shutters that clip its pulses differently from power to power. */
-const MOST_CLIPPED_WAYS = 50_000;
+const MOST_CLIPPED_WAYS = 12_500;
 
 /** How many ways there are to set the flashes of a role, and how many may be. */
 export interface Ways {
@@ -27,7 +27,7 @@ function clippingShutters({ camera }: FillWish, fromS: number): number {
  *
  * @param wish a request
  * @returns each such role with its ways and what is allowed
- * @example three flashes of one role with 28 powers each: 29³ = 24,389 ways, which is allowed
+ * @example three flashes of one role with 22 powers each, thirds from 1/1 to 1/128: 23³ = 12,167 ways, which is allowed
  */
 export function rolesWithTooManyWays(wish: FillWish): Ways[] {
   const roles: FlashRole[] = ['key', 'fill', 'rim'];

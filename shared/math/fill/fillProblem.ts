@@ -54,7 +54,7 @@ export function fillProblem(wish: FillWish, before?: FillProblem): FillProblem {
   const isSameCamera = before?.wish.camera === wish.camera;
   return {
     wish,
-    grid: before && isSameCamera ? before.grid : cameraGrid(wish.camera, before?.grid.shutters),
+    grid: before && isSameCamera ? before.grid : cameraGrid(wish.camera),
     tables: flashTables(flashes, wish.camera.shutCurtainS, ratio, before?.tables),
     parts,
   };
@@ -100,21 +100,16 @@ export function isWithin(one: FillCase, most: MissLimits, flash = most): boolean
   return rim === null || canDo(table.rim, rim, { sum: flash.beside, ratio: flash.beside });
 }
 
-/** Where the shutters from one Tv to another begin and end in a list that runs from slow to fast. */
-function shutterRange(
-  shutters: readonly GridShutter[],
-  tvLow: number,
-  tvHigh: number,
-): [number, number] {
-  let [first, last] = [0, shutters.length];
-  while (first < last) {
-    const middle = (first + last) >> 1;
-    if ((shutters[middle]?.tv ?? 0) < tvLow) first = middle + 1;
-    else last = middle;
-  }
-  let end = first;
-  while (end < shutters.length && (shutters[end]?.tv ?? 0) <= tvHigh) end++;
-  return [first, end];
+/** The first shutter from a Tv on, in a list from slow to fast whose marks stand a step apart, but for a few at its slow end. */
+function firstShutter(shutters: readonly GridShutter[], steps: number, tvLow: number): number {
+  const last = shutters[shutters.length - 1]?.tv ?? 0;
+  let first = Math.max(
+    0,
+    Math.min(shutters.length, shutters.length - 1 - Math.floor((last - tvLow) * steps)),
+  );
+  while (first > 0 && (shutters[first - 1]?.tv ?? 0) >= tvLow) first--;
+  while (first < shutters.length && (shutters[first]?.tv ?? 0) < tvLow) first++;
+  return first;
 }
 
 /**
@@ -135,10 +130,10 @@ export function someNearBackground(
   const room = mostAt(count);
   for (const lens of lenses) {
     const tv = wished - lens.stops;
-    const [first, end] = shutterRange(shutters, tv - room, tv + room);
-    for (let place = first; place < end; place++) {
+    for (let place = firstShutter(shutters, grid.steps, tv - room); place < shutters.length; place++) {
       const shutter = shutters[place];
-      if (shutter !== undefined && visit(lens, shutter, place)) return true;
+      if (shutter === undefined || shutter.tv > tv + room) break;
+      if (visit(lens, shutter, place)) return true;
     }
   }
   return false;

@@ -35,6 +35,8 @@ export interface FlashTable {
 const MOST_RISE_S = 1e-3;
 /** A share that is this near to all of a pulse is all of it in a double: 1 − e^−40. */
 const WHOLE_PULSE = 40 / Math.LN2;
+/** Factors of light that differ by less are the same. */
+const SAME_FACTOR = 1e-12;
 
 function levelsOf(
   flash: FillFlash,
@@ -83,6 +85,49 @@ export function isClippedAlike(flashes: readonly FillFlash[]): boolean {
 export interface RoleTable {
   readonly flashes: readonly FillFlash[];
   readonly at: (shutter: GridShutter) => RoleSums;
+}
+
+/** By what factor all of these give more or less than those, nearest or farthest; null where that differs from flash to flash. */
+function factorBetween(
+  before: readonly FillFlash[],
+  after: readonly FillFlash[],
+  end: 'nearM' | 'farM',
+): number | null {
+  const factors = after.map((flash, i) => ((before[i]?.[end] ?? 0) / flash[end]) ** 2);
+  const [first = 1] = factors;
+  return factors.every((factor) => Math.abs(factor / first - 1) < SAME_FACTOR) ? first : null;
+}
+
+/** The table of flashes that differ from those of another by having moved alike, of which nothing need be summed anew. */
+function movedTable(before: RoleTable, flashes: readonly FillFlash[]): RoleTable | null {
+  const isMoved = (flash: FillFlash, i: number) => {
+    const was = before.flashes[i];
+    return was !== undefined && isSameFlash({ ...flash, nearM: was.nearM, farM: was.farM }, was);
+  };
+  if (flashes.length !== before.flashes.length || !flashes.every(isMoved)) return null;
+  const far = factorBetween(before.flashes, flashes, 'farM');
+  const near = factorBetween(before.flashes, flashes, 'nearM');
+  if (far === null || near === null) return null;
+  const known = new Map<RoleSums, RoleSums>();
+  const at = (shutter: GridShutter) => {
+    const was = before.at(shutter);
+    const now = known.get(was) ?? withFlashes(scaledSums(was, far, near), before.flashes, flashes);
+    known.set(was, now);
+    return now;
+  };
+  return { flashes, at };
+}
+
+const isSameFlash = (a: FillFlash, b: FillFlash) =>
+  (Object.keys(a) as (keyof FillFlash)[]).every((field) => a[field] === b[field]);
+
+/** Sums with the flashes as they stand after moving. */
+function withFlashes(sums: RoleSums, before: readonly FillFlash[], after: readonly FillFlash[]): RoleSums {
+  const flashes = sums.flashes.map((one) => ({
+    ...one,
+    flash: after[before.indexOf(one.flash)] ?? one.flash,
+  }));
+  return { ...sums, flashes };
 }
 
 function roleTable(flashes: readonly FillFlash[], shutCurtainS: number): RoleTable {
@@ -139,8 +184,9 @@ export function flashTables(
   const tableOf = (role: FlashRole) => {
     const own = flashes.filter((flash) => flash.role === role);
     const known = before?.roles[role];
-    const isKnown = known && before.shutCurtainS === shutCurtainS && isSame(known.flashes, own);
-    return isKnown ? known : roleTable(own, shutCurtainS);
+    if (known === undefined || before?.shutCurtainS !== shutCurtainS) return roleTable(own, shutCurtainS);
+    if (isSame(known.flashes, own)) return known;
+    return movedTable(known, own) ?? roleTable(own, shutCurtainS);
   };
   const roles = { key: tableOf('key'), fill: tableOf('fill'), rim: tableOf('rim') };
   const isSameAll = before?.ratio === ratio && ROLES.every((role) => before.roles[role] === roles[role]);

@@ -116,8 +116,23 @@ export function someFill(
   return false;
 }
 
-/** Whether any way to set the flashes keeps within bounds. */
-export function isMixed(group: FlashGroup, b: MixBounds): boolean {
-  if (b.sumHigh < 0) return false;
-  return someFill(group, b, (_, least, most) => hasKeyBetween(group.keys, least, most, b.needsKey));
+/** Key and fill change places. */
+export const swappedGroup = ({ keys, fills }: FlashGroup): FlashGroup => ({ keys: fills, fills: keys });
+
+/** The bounds of a group whose key and fill have changed places. */
+export const swappedBounds = (b: MixBounds): MixBounds => ({
+  sumLow: b.sumLow,
+  sumHigh: b.sumHigh,
+  ratioLow: 1 / b.ratioHigh,
+  ratioHigh: 1 / b.ratioLow,
+  needsKey: b.needsFill,
+  needsFill: b.needsKey,
+});
+
+/** Whether any way to set the flashes keeps within bounds; the role with fewer ways is gone through, the other searched. */
+export function isMixed(group: FlashGroup, bounds: MixBounds): boolean {
+  if (bounds.sumHigh < 0) return false;
+  const isSwapped = group.keys.low.length < group.fills.low.length;
+  const [mixed, b] = isSwapped ? [swappedGroup(group), swappedBounds(bounds)] : [group, bounds];
+  return someFill(mixed, b, (_, least, most) => hasKeyBetween(mixed.keys, least, most, b.needsKey));
 }

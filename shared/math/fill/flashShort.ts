@@ -1,6 +1,13 @@
 import { canDo } from './assignFlashes';
 import { caseOf, someNearBackground, type FillCase, type FillProblem, type MissLimits } from './fillProblem';
-import { boundsWithin, someFill, type FlashGroup, type MixBounds } from './flashMix';
+import {
+  boundsWithin,
+  someFill,
+  swappedBounds,
+  swappedGroup,
+  type FlashGroup,
+  type MixBounds,
+} from './flashMix';
 import { isTooWeak, type FlashLimit } from './limits';
 import { lastAtMost, type RoleSums } from './roleSums';
 
@@ -8,18 +15,6 @@ import { lastAtMost, type RoleSums } from './roleSums';
 const MOST_STOPS = 60;
 
 const alike = (count: number) => ({ sum: count, ratio: count });
-
-/** Key and fill change places. */
-const swappedGroup = ({ keys, fills }: FlashGroup): FlashGroup => ({ keys: fills, fills: keys });
-
-const swappedBounds = (b: MixBounds): MixBounds => ({
-  sumLow: b.sumLow,
-  sumHigh: b.sumHigh,
-  ratioLow: 1 / b.ratioHigh,
-  ratioHigh: 1 / b.ratioLow,
-  needsKey: b.needsFill,
-  needsFill: b.needsKey,
-});
 
 /** By how much the nearest weaker way falls short of a span of light, stops. */
 function weakerBy({ low, reach }: RoleSums, least: number, most: number): number {

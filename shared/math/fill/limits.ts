@@ -1,3 +1,4 @@
+import { rolesWithTooManyWays } from './countWays';
 import { exactAt, positionOf, stepsPerStop, type MarkedKind } from '../marks';
 import type { FillCamera, FillFlash, FillRecipe, FillWish } from './fillTypes';
 
@@ -92,6 +93,17 @@ function filterLimit(wish: FillWish): MovableLimit {
 
 /** The limits of a request's camera, each as something that could be moved. */
 export function movableLimits(wish: FillWish): readonly MovableLimit[] {
+  return everyLimit(wish).map(heldWithinWays);
+}
+
+/** A limit that moves no farther than a request may go, which may not have its flashes set in more ways than are gone through. */
+function heldWithinWays(movable: MovableLimit): MovableLimit {
+  let { mostSteps } = movable;
+  while (mostSteps > 0 && rolesWithTooManyWays(movable.movedBy(mostSteps)).length > 0) mostSteps--;
+  return { ...movable, mostSteps };
+}
+
+function everyLimit(wish: FillWish): MovableLimit[] {
   return [
     filterLimit(wish),
     markLimit(wish, 'iso_max', 'iso', 'isoMax', 1),

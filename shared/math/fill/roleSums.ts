@@ -19,7 +19,7 @@ export interface RoleSums {
 }
 
 /** Ways to set the powers of one role together; more are refused before it comes to this. */
-export const MOST_WAYS = 25_000;
+export const MOST_WAYS = 12_500;
 
 /** Low bits of a double that hold a way's place while its light is sorted; they change it by 1e-11 at most. */
 const PLACE_MASK = 32_767;
@@ -93,16 +93,21 @@ function useOf(flashes: readonly FlashLevels[], code: Int32Array): Pick<RoleSums
   return { used, power };
 }
 
-/** The same ways with all light times a factor. */
-export function scaledSums(sums: RoleSums, factor: number): RoleSums {
-  const times = (light: number) => light * factor;
-  const flashes = sums.flashes.map((one) => ({ ...one, low: one.low.map(times), high: one.high.map(times) }));
+const timesAll = (light: Float64Array, factor: number) =>
+  factor === 1 ? light : light.map((one) => one * factor);
+
+/** The same ways with the least and the most of their light times a factor each. */
+export function scaledSums(sums: RoleSums, lowFactor: number, highFactor = lowFactor): RoleSums {
   return {
     ...sums,
-    flashes,
-    low: sums.low.map(times),
-    high: sums.high.map(times),
-    reach: sums.reach.map(times),
+    flashes: sums.flashes.map((one) => ({
+      ...one,
+      low: timesAll(one.low, lowFactor),
+      high: timesAll(one.high, highFactor),
+    })),
+    low: timesAll(sums.low, lowFactor),
+    high: timesAll(sums.high, highFactor),
+    reach: timesAll(sums.reach, highFactor),
   };
 }
 
