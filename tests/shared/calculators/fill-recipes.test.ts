@@ -130,14 +130,15 @@ describe('fill/recipes where the answer would mislead', () => {
 
   it('gives up the cheapest first, each with the recipe that results', () => {
     // A flash that goes low enough not to stand in the way itself.
-    const dark = { ...dusk, background: { ev100: -4 }, flashes: [{ ...key, minPower: 1 / 8192 }] };
+    const dark = { ...dusk, background: { ev100: -4 }, flashes: [{ ...key, minPower: 1 / 4096 }] };
     const { whyNot = [] } = ask(dark).result;
     expect(whyNot.length).toBeGreaterThan(1);
     const slower = whyNot.find(({ limit }) => limit === 'shutter_slowest');
     // f/1.8 at ISO 6400 and 1/4 s is EV 1.67 + 2 − 6 = −2.33; half a step may be missed, so 1.67 stops are short.
     expect(slower?.shortByStops).toBeCloseTo(5 / 3, 9);
     expect(slower?.recipe?.outcome.onAim).toBe(true);
-    expect(whyNot.find(({ limit }) => limit === 'iso_max')?.shortByStops).toBeCloseTo(5 / 3, 9);
+    const left = whyNot.map(({ leavesStops, shortByStops }) => leavesStops * 1000 + (shortByStops ?? 999));
+    expect(left).toEqual([...left].sort((a, b) => a - b));
   });
 });
 
