@@ -11,7 +11,9 @@ export interface NavigationLine {
 
 const LINES: readonly NavigationLine[] = [
   { title: 'Calculators', to: '/calculators' },
+  { title: 'Try it', to: '/try', roles: ['developer'] },
   { title: 'Keys', to: '/keys', roles: ['developer'] },
+  { title: 'Usage', to: '/usage', roles: ['developer'] },
   { title: 'API reference', to: '/docs', isServed: true },
 ];
 

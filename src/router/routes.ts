@@ -1,4 +1,5 @@
 import type { RouteRecordRaw } from 'vue-router';
+import type { Role } from './navigation';
 
 declare module 'vue-router' {
   interface RouteMeta {
@@ -7,6 +8,8 @@ declare module 'vue-router' {
     description?: string;
     /** Whether it belongs to an account, so that one signs in first. */
     isOwn?: boolean;
+    /** Roles of which one is needed; whoever is signed in where nothing is said. */
+    roles?: readonly Role[];
   }
 }
 
@@ -84,6 +87,24 @@ export const routes: readonly RouteRecordRaw[] = [
     component: () => import('../views/KeyView.vue'),
     props: true,
     meta: { title: 'Key', isOwn: true },
+  },
+  {
+    path: '/usage',
+    name: 'usage',
+    component: () => import('../views/UsageView.vue'),
+    meta: { title: 'Usage', isOwn: true },
+  },
+  {
+    path: '/plan',
+    name: 'plan',
+    component: () => import('../views/PlanView.vue'),
+    meta: { title: 'Plan', isOwn: true },
+  },
+  {
+    path: '/try',
+    name: 'try',
+    component: () => import('../views/TryView.vue'),
+    meta: { title: 'Try it', isOwn: true },
   },
   {
     path: '/:rest(.*)*',
