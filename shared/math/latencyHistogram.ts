@@ -13,7 +13,7 @@ export function latencyBucket(ms: number): number {
 }
 
 /** Upper bound of a bucket in milliseconds: 0.1·2^(i/2). Example: bucket 2 ends at 0.2 ms. */
-export function bucketEndMs(bucket: number): number {
+function bucketEndMs(bucket: number): number {
   return FIRST_MS * 2 ** (bucket / 2);
 }
 

@@ -13,7 +13,7 @@ const NOTES: Readonly<Record<string, string>> = {
   'www-authenticate': 'How to authenticate: a bearer key.',
 };
 
-export const headerNote = (name: string): string | undefined => NOTES[name.toLowerCase()];
+const headerNote = (name: string): string | undefined => NOTES[name.toLowerCase()];
 
 export interface ShownHeader {
   readonly name: string;
