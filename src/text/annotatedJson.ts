@@ -6,9 +6,11 @@ export interface JsonLine {
   readonly note?: string;
 }
 
-function noteOf({ title, unit, description }: Field): string {
-  const measured = unit ? `${title}, ${unit}` : title;
-  return description ? `${measured}: ${description}` : measured;
+/** A title that is only the name once more says nothing. */
+function noteOf({ name, title, unit, description }: Field): string {
+  const parts = [title === name ? '' : title, unit ?? ''].filter(Boolean);
+  const measured = parts.join(', ');
+  return measured && description ? `${measured}: ${description}` : (description ?? measured);
 }
 
 const isObject = (value: unknown): value is Record<string, unknown> =>
