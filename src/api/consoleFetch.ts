@@ -2,10 +2,11 @@ import { refusedByNetwork } from './Refused';
 
 /** What of the browser a request needs; handed in, so that tests can stand in for it. */
 export interface Surroundings {
-  readonly fetch: typeof fetch;
+  readonly fetch: (request: Request) => Promise<Response>;
   /** Runs one task at a time over all tabs of this site. */
   readonly alone: <T>(task: () => Promise<T>) => Promise<T>;
   readonly onSessionEnd: () => void;
+  readonly timeOutMs?: number;
 }
 
 const TIME_OUT_MS = 15_000;
@@ -28,6 +29,12 @@ async function needsRenewal(request: Request, response: Response): Promise<boole
   return response.status === 401 && RENEWABLE.has((await codeOf(response)) ?? '');
 }
 
+/** The answer with its content fetched, so that a connection that breaks midway is told like any other. */
+async function whole(response: Response): Promise<Response> {
+  const content = await response.arrayBuffer();
+  return new Response(content.byteLength > 0 ? content : null, response);
+}
+
 /**
  * A `fetch` for the console's own API: says that it comes from an own page, gives up in time, and renews the session
  * once where its minutes are over. Tabs take turns, since a refresh token is good for one use; whoever waited tries
@@ -37,11 +44,12 @@ export function consoleFetch({
   fetch,
   alone,
   onSessionEnd,
-}: Surroundings): (r: Request) => Promise<Response> {
+  timeOutMs = TIME_OUT_MS,
+}: Surroundings): (given: Request) => Promise<Response> {
   const send = async (request: Request): Promise<Response> => {
-    const signal = AbortSignal.any([request.signal, AbortSignal.timeout(TIME_OUT_MS)]);
+    const signal = AbortSignal.any([request.signal, AbortSignal.timeout(timeOutMs)]);
     try {
-      return await fetch(new Request(request, { signal }));
+      return await whole(await fetch(new Request(request, { signal })));
     } catch (error) {
       if (request.signal.aborted) throw error;
       throw refusedByNetwork(error);
@@ -52,7 +60,9 @@ export function consoleFetch({
     if (!(await needsRenewal(request, again))) return again;
     const url = new URL(REFRESH, request.url);
     const renewal = await send(new Request(url, { method: 'POST', body: '{}', headers: OWN_PAGE }));
-    return renewal.ok ? send(request.clone()) : again;
+    if (renewal.ok) return send(request.clone());
+    // Only a refusal ends the session; a service that is busy or down leaves it as it is.
+    return renewal.status === 401 ? again : renewal;
   };
   return async (given) => {
     const request = new Request(given, { credentials: 'same-origin' });

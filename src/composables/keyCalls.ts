@@ -13,8 +13,8 @@ const at = (id: string) => ({ params: { path: { id } } });
 
 /** What developers do with their keys; each gives what the service answers, or throws why it did not. */
 export const keyCalls = {
-  list: () => taken(consoleApi.GET('/api/keys')),
-  read: (id: string) => taken(consoleApi.GET('/api/keys/{id}', at(id))),
+  list: (signal?: AbortSignal) => taken(consoleApi.GET('/api/keys', { signal })),
+  read: (id: string, signal?: AbortSignal) => taken(consoleApi.GET('/api/keys/{id}', { ...at(id), signal })),
   /** @param idempotencyKey one for each key that is wished for, so that trying again makes no second one */
   make: (body: KeyWish, idempotencyKey: string) =>
     taken(consoleApi.POST('/api/keys', { body, headers: { 'Idempotency-Key': idempotencyKey } })),

@@ -12,27 +12,47 @@ export interface Submission {
   submit(): Promise<void>;
 }
 
-function byField(refused: Refused): Record<string, string[]> {
-  const faults: Record<string, string[]> = {};
+interface SubmitOptions {
+  /** The field at fault for problems that name none, by their code. */
+  readonly fieldOf?: Readonly<Record<string, string>>;
+}
+
+type Faults = Record<string, string[]>;
+
+function byField(refused: Refused, fieldOf: SubmitOptions['fieldOf'] = {}): Faults {
+  const field = fieldOf[refused.code];
+  if (field) return { [field]: [refused.message] };
+  const faults: Faults = {};
   for (const { pointer, detail } of refused.faults) (faults[pointer.split('/')[1] ?? ''] ??= []).push(detail);
   return faults;
 }
 
-/** Takes the reader to the first field at fault, once it says so. */
-async function showFirstFault(): Promise<void> {
+/** Takes the reader to the first field at fault of the form that they are in, once it says so; false if none does. */
+async function showFirstFault(): Promise<boolean> {
+  const scope = document.activeElement?.closest('[role=dialog], form, main') ?? document;
   await nextTick();
-  document.querySelector<HTMLElement>('main [aria-invalid=true]')?.focus();
+  const first = scope.querySelector<HTMLElement>('[aria-invalid=true]');
+  first?.focus();
+  return first !== null;
 }
 
 /**
- * Runs what a form asks for, once at a time, and keeps what went wrong beside the fields that it is about. What was
- * typed stays as it is.
+ * Runs what a form asks for, once at a time, and keeps what went wrong beside the fields that it is about; a fault
+ * whose field is not on the screen is said of the form as a whole. What was typed stays as it is.
  */
-export function useSubmit(send: () => Promise<unknown>): Submission {
+export function useSubmit(send: () => Promise<unknown>, { fieldOf }: SubmitOptions = {}): Submission {
   const isSending = ref(false);
-  const faults = ref<Record<string, readonly string[]>>({});
+  const faults = ref<Readonly<Record<string, readonly string[]>>>({});
   const trouble = ref<string | null>(null);
   const code = ref<string | null>(null);
+
+  async function tell(refused: Refused): Promise<void> {
+    code.value = refused.code;
+    faults.value = byField(refused, fieldOf);
+    const said = Object.values(faults.value).flat();
+    if (said.length === 0) trouble.value = refused.message;
+    else if (!(await showFirstFault())) trouble.value = said.join(' ');
+  }
 
   async function submit(): Promise<void> {
     if (isSending.value) return;
@@ -44,10 +64,7 @@ export function useSubmit(send: () => Promise<unknown>): Submission {
       await send();
     } catch (error) {
       if (!(error instanceof Refused)) throw error;
-      code.value = error.code;
-      faults.value = byField(error);
-      if (error.faults.length > 0) await showFirstFault();
-      else trouble.value = error.message;
+      await tell(error);
     } finally {
       isSending.value = false;
     }

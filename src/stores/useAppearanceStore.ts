@@ -36,5 +36,10 @@ export const useAppearanceStore = defineStore('appearance', () => {
     }
   }
 
-  return { appearance, palette, choose };
+  /** Stores the choice anew, after what this site had stored was cleared. */
+  function keep(): void {
+    if (chosen.value) choose(chosen.value);
+  }
+
+  return { appearance, palette, choose, keep };
 });

@@ -3,21 +3,21 @@ import { computed, ref } from 'vue';
 import type { Account } from '../api/consoleApi';
 import type { Role } from '../router/navigation';
 
-/** Tells the next page that somebody was signed in here, so that strangers cost no request. */
+/** Tells the next page, and other tabs, who was signed in here; strangers cost no request. */
 const SEEN_AS = 'evenfall.signed-in';
 
-function wasSeen(): boolean {
+function seen(): string | null {
   try {
-    return localStorage.getItem(SEEN_AS) !== null;
+    return localStorage.getItem(SEEN_AS);
   } catch {
-    return true;
+    return 'unknown';
   }
 }
 
-function remember(isSignedIn: boolean): void {
+function remember(id: string | undefined): void {
   try {
-    if (isSignedIn) localStorage.setItem(SEEN_AS, '1');
-    else localStorage.removeItem(SEEN_AS);
+    if (id === undefined) localStorage.removeItem(SEEN_AS);
+    else localStorage.setItem(SEEN_AS, id);
   } catch {
     // Storage may be closed to this page; then every page asks.
   }
@@ -27,18 +27,27 @@ function remember(isSignedIn: boolean): void {
 export const useSessionStore = defineStore('session', () => {
   const account = ref<Account | null>(null);
   const roles = computed<readonly Role[]>(() => account.value?.roles ?? []);
+  /** Whether a session ended in the middle of this visit, other than by signing out. */
+  const hasEnded = ref(false);
   let asking: Promise<void> | null = null;
+  let hasAsked = false;
 
   function take(next: Account | null): void {
     account.value = next;
-    remember(next !== null);
+    if (next) hasEnded.value = false;
+    remember(next?.id);
+  }
+
+  function end(): void {
+    if (account.value) hasEnded.value = true;
+    take(null);
   }
 
   let isListening = false;
   /** Comes with the first request, not with the first page. */
   async function client() {
     const api = await import('../api/consoleApi');
-    if (!isListening) api.onSessionEnd(() => take(null));
+    if (!isListening) api.onSessionEnd(end);
     isListening = true;
     return api;
   }
@@ -46,29 +55,26 @@ export const useSessionStore = defineStore('session', () => {
   async function ask(): Promise<void> {
     const { consoleApi, taken } = await client();
     const state = await taken(consoleApi.GET('/api/session'));
-    take(state.account);
+    if (state.account) take(state.account);
+    else end();
+    hasAsked = true;
   }
 
-  /**
-   * Asks who is signed in, once.
-   * @param isCertain asks in any case, for screens that are somebody's own
-   */
-  async function load(isCertain = false): Promise<void> {
-    if (!asking && !isCertain && !wasSeen()) return;
-    asking ??= ask();
-    try {
-      await asking;
-    } catch (error) {
-      asking = null;
-      if (isCertain) throw error;
-    }
+  function askOnce(): Promise<void> {
+    asking ??= ask().finally(() => (asking = null));
+    return asking;
   }
 
-  async function signIn(email: string, password: string): Promise<void> {
-    const { consoleApi, taken } = await client();
-    const answer = await taken(consoleApi.POST('/api/session', { body: { email, password } }));
-    asking = Promise.resolve();
-    take(answer.account);
+  /** Asks who is signed in, where somebody may be. It delays nothing, and that no answer comes is no trouble. */
+  async function look(): Promise<void> {
+    if (account.value || hasAsked || seen() === null) return;
+    await askOnce().catch(() => undefined);
+  }
+
+  /** Asks who is signed in, for screens that are somebody's own. */
+  async function require(): Promise<Account | null> {
+    if (!account.value) await askOnce();
+    return account.value;
   }
 
   async function signOut(): Promise<void> {
@@ -77,5 +83,11 @@ export const useSessionStore = defineStore('session', () => {
     take(null);
   }
 
-  return { account, roles, load, signIn, signOut, take };
+  // Another tab signed in or out, and the cookies are shared: what stands here would be somebody else's.
+  addEventListener('storage', ({ key }) => {
+    if (key !== null && key !== SEEN_AS) return;
+    if (seen() !== (account.value?.id ?? null)) void askOnce().catch(() => undefined);
+  });
+
+  return { account, roles, hasEnded, look, require, signOut, take };
 });

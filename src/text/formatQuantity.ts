@@ -1,3 +1,5 @@
+import { lengthOf, unitShown, type LengthUnit } from './lengthUnit';
+
 /** Figures that are shown; more would say more than any light meter knows. */
 const FIGURES = 4;
 
@@ -25,10 +27,11 @@ export function formatSignedStops(value: number): string {
   return text === '0' || text.startsWith('−') ? text : `+${text}`;
 }
 
-/** A number with the precision and the space that its unit asks for. */
-export function formatQuantity(value: number, unit?: string): string {
+/** A number with the precision and the space that its unit asks for; metres as the reader measures. */
+export function formatQuantity(value: number, unit?: string, measure: LengthUnit = 'metres'): string {
   if (unit === 'stops') return formatStops(value);
   if (unit === 's') return formatTime(value);
+  if (unit === 'm') return `${formatNumber(lengthOf(value, measure))} ${unitShown(unit, measure)}`;
   const text = formatNumber(value);
   if (!unit) return text;
   return unit === '°' || unit === '%' ? `${text}${unit === '%' ? ' %' : unit}` : `${text} ${unit}`;

@@ -1,8 +1,10 @@
+import { calculatorGroup } from './calculatorGroups';
+
 /** What a key's state means for calls. */
 const STATES = {
   unclaimed: 'waits for you to generate it',
   live: 'works',
-  replaced: 'replaced, works until it expires',
+  replaced: 'replaced, still works',
   expired: 'expired',
   revoked: 'revoked',
 } as const;
@@ -11,8 +13,20 @@ export type KeyState = keyof typeof STATES;
 
 export const keyStateText = (state: KeyState): string => STATES[state];
 
-/** Whether calls with it may still be answered. */
-export const isWorking = (state: KeyState): boolean => state === 'live' || state === 'replaced';
+/** Whether no call with it will be answered any more. */
+export const hasEnded = (state: KeyState): boolean => state === 'expired' || state === 'revoked';
+
+/** Whether its name and limits may change: a widget's key changes with its widget, a replaced one stays as it was. */
+export const mayChange = ({ kind, state }: { kind: 'server' | 'page'; state: KeyState }): boolean =>
+  kind === 'server' && (state === 'live' || state === 'unclaimed');
+
+const OTHER_SCOPES: Readonly<Record<string, string>> = { frames: 'Test frames', batch: 'Batches' };
+
+export const scopeTitle = (scope: string): string => OTHER_SCOPES[scope] ?? calculatorGroup(scope).title;
+
+/** What a key may call, in one line. */
+export const scopesText = (scopes: readonly string[]): string =>
+  scopes[0] === '*' ? 'everything' : scopes.map(scopeTitle).join(', ');
 
 /** A key as it may be shown: its first characters and its last. */
 export function shownKey({

@@ -1,4 +1,5 @@
 import type { Field } from '../../shared/contract/field';
+import type { LengthUnit } from './lengthUnit';
 import { isSettingShape, type SettingShape } from './settingShape';
 import { formatNumber } from './formatQuantity';
 import { residualText, valueText } from './valueText';
@@ -55,41 +56,62 @@ function settingPart(titled: Titled, value: SettingShape): ResultPart {
 }
 
 /** A list whose rows hold more than single values: one group an item, called by its first value. */
-function groupsOf(titled: Titled, fields: readonly Field[], items: readonly unknown[]): ResultPart[] {
+function groupsOf(
+  titled: Titled,
+  fields: readonly Field[],
+  items: readonly unknown[],
+  measure: LengthUnit,
+): ResultPart[] {
   return items.map((item, i) => {
-    const first = fields[0] && valueText(fields[0], valuesOf(item)[fields[0].name]);
+    const first = fields[0] && valueText(fields[0], valuesOf(item)[fields[0].name], measure);
     const title = `${titled.title} ${i + 1}${first ? `: ${first}` : ''}`;
-    return { kind: 'group', name: `${titled.name}${i}`, title, parts: resultParts(fields.slice(1), item) };
+    return {
+      kind: 'group',
+      name: `${titled.name}${i}`,
+      title,
+      parts: resultParts(fields.slice(1), item, measure),
+    };
   });
 }
 
-function listParts(titled: Titled, fields: readonly Field[], items: readonly unknown[]): ResultPart[] {
+function listParts(
+  titled: Titled,
+  fields: readonly Field[],
+  items: readonly unknown[],
+  measure: LengthUnit,
+): ResultPart[] {
   if (items.length === 0) return [{ ...titled, kind: 'value', text: 'none' }];
   if (fields.some(({ name }) => name === 'message')) {
     const sentences = items.map((item) => String(valuesOf(item).message));
     return [{ ...titled, kind: 'sentences', sentences }];
   }
-  if (fields.some(isCompound)) return groupsOf(titled, fields, items);
-  const rows = items.map((item) => fields.map((field) => valueText(field, valuesOf(item)[field.name])));
+  if (fields.some(isCompound)) return groupsOf(titled, fields, items, measure);
+  const rows = items.map((item) =>
+    fields.map((field) => valueText(field, valuesOf(item)[field.name], measure)),
+  );
   return [{ ...titled, kind: 'table', columns: fields.map(({ title }) => title), rows }];
 }
 
-function partOf(field: Field, value: unknown): ResultPart[] {
+function partOf(field: Field, value: unknown, measure: LengthUnit): ResultPart[] {
   const { name, title, description } = field;
   const titled = { name, title, description };
   if (value === undefined) return [];
   if (isSettingShape(value)) return [settingPart(titled, value)];
   if (field.kind === 'group' && value !== null)
-    return [{ ...titled, kind: 'group', parts: resultParts(field.fields ?? [], value) }];
+    return [{ ...titled, kind: 'group', parts: resultParts(field.fields ?? [], value, measure) }];
   if (field.kind === 'list' && field.item?.fields && Array.isArray(value))
-    return listParts(titled, field.item.fields, value);
+    return listParts(titled, field.item.fields, value, measure);
   const code = field.kind === 'choice' && typeof value === 'string' ? value : undefined;
-  return [{ ...titled, kind: 'value', text: valueText(field, value), code }];
+  return [{ ...titled, kind: 'value', text: valueText(field, value, measure), code }];
 }
 
 /** An answer's result in the order and the words of its output schema. */
-export function resultParts(fields: readonly Field[], result: unknown): ResultPart[] {
-  return fields.flatMap((field) => partOf(field, valuesOf(result)[field.name]));
+export function resultParts(
+  fields: readonly Field[],
+  result: unknown,
+  measure: LengthUnit = 'metres',
+): ResultPart[] {
+  return fields.flatMap((field) => partOf(field, valuesOf(result)[field.name], measure));
 }
 
 /**

@@ -1,11 +1,12 @@
 import type { Field } from '../../shared/contract/field';
+import type { LengthUnit } from './lengthUnit';
 import { choiceTitle } from './choiceTitle';
 import { formatQuantity, formatStops } from './formatQuantity';
 import { isSettingShape } from './settingShape';
 
 /** Names that end in stops are differences, which read "2 stops"; the others are places on a scale, as an EV is. */
-function numberText({ name, unit }: Field, value: number): string {
-  const text = formatQuantity(value, unit);
+function numberText({ name, unit }: Field, value: number, measure: LengthUnit): string {
+  const text = formatQuantity(value, unit, measure);
   if (unit !== 'stops' || !/stops$/i.test(name)) return text;
   return `${text} ${/^−?1$/.test(text) ? 'stop' : 'stops'}`;
 }
@@ -18,16 +19,17 @@ export function residualText(stops: number): string {
 }
 
 /** A value of an answer on one line; what is not there, or null, is a dash. */
-export function valueText(field: Field, value: unknown): string {
+export function valueText(field: Field, value: unknown, measure: LengthUnit = 'metres'): string {
   if (value === null || value === undefined) return '–';
   if (isSettingShape(value)) return value.mark;
-  if (typeof value === 'number') return numberText(field, value);
+  if (typeof value === 'number') return numberText(field, value, measure);
   if (typeof value === 'boolean') return value ? 'yes' : 'no';
   if (typeof value === 'string') return field.kind === 'choice' ? choiceTitle(value) : value;
-  if (Array.isArray(value)) return value.map((one) => valueText(field.item ?? field, one)).join(', ');
+  if (Array.isArray(value))
+    return value.map((one) => valueText(field.item ?? field, one, measure)).join(', ');
   const held = value as Readonly<Record<string, unknown>>;
   return (field.fields ?? [])
     .filter(({ name }) => held[name] !== undefined)
-    .map((part) => `${part.title} ${valueText(part, held[part.name])}`)
+    .map((part) => `${part.title} ${valueText(part, held[part.name], measure)}`)
     .join(', ');
 }
