@@ -1,3 +1,4 @@
+import './composables/zodWithoutEval';
 import { createPinia } from 'pinia';
 import { createApp } from 'vue';
 import App from './App.vue';

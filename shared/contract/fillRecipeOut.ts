@@ -37,12 +37,10 @@ export const fillRecipeOut = z.strictObject({
   }),
 });
 
+export type FillRecipeOut = z.output<typeof fillRecipeOut>;
+
 /** A recipe in the answer's shape. */
-export function shapeRecipe(
-  recipe: FillRecipe,
-  camera: FillCamera,
-  first: FillRecipe,
-): z.output<typeof fillRecipeOut> {
+export function shapeRecipe(recipe: FillRecipe, camera: FillCamera, first: FillRecipe): FillRecipeOut {
   const { aperture, shutter, iso, ndStops, sync, flashes, outcome, score } = recipe;
   return {
     settings: {

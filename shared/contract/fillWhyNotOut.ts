@@ -30,6 +30,8 @@ export const limitOut = z.strictObject({
   recipe: fillRecipeOut.optional().meta({ title: 'Recipe', description: 'what results from giving it up' }),
 });
 
+export type LimitOut = z.output<typeof limitOut>;
+
 interface MarkedLimit {
   readonly kind: MarkedKind;
   readonly exactOf: (camera: FillCamera) => number;
@@ -88,11 +90,7 @@ function paramsOf(one: LimitInTheWay, wish: FillWish): LimitParams {
 }
 
 /** A limit in the answer's shape; its recipe is told against the best one, where there is one. */
-export function shapeLimit(
-  one: LimitInTheWay,
-  wish: FillWish,
-  first: FillRecipe | undefined,
-): z.output<typeof limitOut> {
+export function shapeLimit(one: LimitInTheWay, wish: FillWish, first: FillRecipe | undefined): LimitOut {
   const { limit, shortByStops, leavesStops, recipe } = one;
   const params = paramsOf(one, wish);
   const factors = isOfFlash(limit)

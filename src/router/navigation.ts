@@ -11,6 +11,7 @@ export interface NavigationLine {
 
 const LINES: readonly NavigationLine[] = [
   { title: 'Calculators', to: '/calculators' },
+  { title: 'Fill', to: '/fill' },
   { title: 'Try it', to: '/try', roles: ['developer'] },
   { title: 'Keys', to: '/keys', roles: ['developer'] },
   { title: 'Usage', to: '/usage', roles: ['developer'] },

@@ -40,6 +40,16 @@ export const routes: readonly RouteRecordRaw[] = [
     meta: { title: 'Calculator' },
   },
   {
+    path: '/fill',
+    name: 'fill',
+    component: () => import('../views/FillView.vue'),
+    meta: {
+      title: 'Flash and ambient light',
+      description:
+        'Settings that put background and subject where they shall land, or what stands in the way.',
+    },
+  },
+  {
     path: '/sign-in',
     name: 'signIn',
     component: () => import('../views/SignInView.vue'),

@@ -73,9 +73,9 @@ function shuttersOf(camera: FillCamera): GridShutter[] {
   // The slowest time stands at the lowest position.
   const [low, high] = positions('shutter', scale, shutterSlowestS, shutterFastestS);
   const shutters: GridShutter[] = [];
-  for (let position = low; position <= high; position++) {
+  // Beyond the slowest marking a step is given in whole seconds, which may lie just within the limit, or just beyond.
+  for (let position = low - 1; position <= high; position++) {
     const mark = shutterAt(scale, position);
-    // Beyond the slowest marking a step is given in whole seconds, which may lie just beyond the limit.
     if (mark.exact > shutterSlowestS * (1 + EDGE)) continue;
     shutters.push({ step: position, mark, tv: -Math.log2(mark.exact), ...syncAt(camera, mark.exact) });
   }

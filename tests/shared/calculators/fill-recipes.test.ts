@@ -142,6 +142,18 @@ describe('fill/recipes where the answer would mislead', () => {
   });
 });
 
+describe('fill/recipes at the slow end', () => {
+  it('takes a limit of whole seconds for a mark that the shutter has', () => {
+    // f/4, 40 s, ISO 100 are EV 4 − log2 40 = −1.32; the next mark, 30 s, is a third of a stop off.
+    const night = { ...camera, apertureMin: 'f/4', apertureMax: 'f/4', isoMax: 100, shutterSlowest: '40s' };
+    const dark = { ...dusk, background: { ev100: 4 - Math.log2(40) }, camera: night, flashes: [] };
+    expect(firstOf({ ...dark, subjectAmbient: { belowBackgroundStops: 0 } }).settings.shutter).toMatchObject({
+      exact: 40,
+      mark: '40s',
+    });
+  });
+});
+
 describe('fill/recipes, what is refused', () => {
   it('limits that cross, a curtain slower than the sync speed, a name twice, light said twice', () => {
     expect(places({ ...dusk, camera: { ...camera, apertureMax: 'f/1.4' } })).toEqual([
