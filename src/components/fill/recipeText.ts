@@ -19,7 +19,8 @@ export function settingsParts({ settings }: FillRecipeOut): string[] {
 export const settingsLine = (recipe: FillRecipeOut): string => settingsParts(recipe).join(', ');
 
 /** A distance as a tape measure gives it. */
-export const distanceText = (distanceM: number): string => `${formatNumber(Number(distanceM.toFixed(2)))} m`;
+export const distanceText = (distanceM: number): string =>
+  `${formatNumber(Number(distanceM.toFixed(2)))}\u00a0m`;
 
 export const flashLine = ({ name, power, distanceM }: Flash): string =>
   `${name} ${power.mark} at ${distanceText(distanceM)}`;
