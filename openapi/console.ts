@@ -1715,7 +1715,7 @@ export interface operations {
                     name: string;
                     /**
                      * Scopes
-                     * @description "*" alone, or some of exposure, light, filters, flash, fill, frames, batch
+                     * @description "*" alone, or some of exposure, light, filters, flash, twilight, fill, frames, batch
                      * @default [
                      *       "*"
                      *     ]
@@ -1858,7 +1858,7 @@ export interface operations {
                     name?: string;
                     /**
                      * Scopes
-                     * @description "*" alone, or some of exposure, light, filters, flash, fill, frames, batch
+                     * @description "*" alone, or some of exposure, light, filters, flash, twilight, fill, frames, batch
                      */
                     scopes?: string[];
                     /**
@@ -2174,7 +2174,7 @@ export interface operations {
             query?: {
                 before?: string;
                 status?: "2xx" | "3xx" | "4xx" | "5xx";
-                calculator?: "exposure/value" | "exposure/solve" | "exposure/equivalents" | "exposure/difference" | "exposure/long" | "exposure/handheld" | "exposure/depth" | "light/convert" | "light/scenes" | "light/add" | "light/ratio" | "light/flicker" | "filters/density" | "filters/gel" | "flash/exposure" | "flash/measured" | "flash/falloff" | "flash/duration" | "flash/motion" | "flash/daylight" | "flash/budget" | "fill/recipes" | "fill/check" | "batch" | "usage";
+                calculator?: "exposure/value" | "exposure/solve" | "exposure/equivalents" | "exposure/difference" | "exposure/long" | "exposure/handheld" | "exposure/depth" | "light/convert" | "light/scenes" | "light/add" | "light/ratio" | "light/flicker" | "filters/density" | "filters/gel" | "flash/exposure" | "flash/measured" | "flash/falloff" | "flash/duration" | "flash/motion" | "flash/daylight" | "flash/budget" | "twilight/day" | "twilight/at" | "twilight/ladder" | "fill/recipes" | "fill/check" | "batch" | "usage";
             };
             header?: never;
             path: {

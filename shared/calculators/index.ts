@@ -30,6 +30,9 @@ export const calculatorList: readonly CalculatorEntry[] = [
   { id: 'flash/motion', title: 'Motion, ghost and shake', load: async () => (await import('./flash/motion')).flashMotion },
   { id: 'flash/daylight', title: 'Wide aperture in daylight', load: async () => (await import('./flash/daylight')).flashDaylight },
   { id: 'flash/budget', title: 'Battery and recycling', load: async () => (await import('./flash/budget')).flashBudget },
+  { id: 'twilight/day', title: 'Light of a day', load: async () => (await import('./twilight/day')).twilightDay },
+  { id: 'twilight/at', title: 'Light at a moment', load: async () => (await import('./twilight/at')).twilightAt },
+  { id: 'twilight/ladder', title: 'Dusk ladder', load: async () => (await import('./twilight/ladder')).twilightLadder },
   { id: 'fill/recipes', title: 'Recipes for flash and ambient light', load: async () => (await import('./fill/recipes')).fillRecipes },
   { id: 'fill/check', title: 'Outcome of given settings', load: async () => (await import('./fill/check')).fillCheck },
 ];

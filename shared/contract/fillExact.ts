@@ -70,7 +70,8 @@ function syncOf({ camera, ...reading }: Given) {
   };
 }
 
-const stepOf = (step: number) => {
+/** A step that is written as 0.333 means a third. */
+export const stepOf = (step: number) => {
   const third = Math.round(step * 3) / 3;
   return third > 0 && Math.abs(step - third) < MEANT_THIRD ? third : step;
 };

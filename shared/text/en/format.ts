@@ -1,4 +1,6 @@
 const MINUS = '−';
+/** Made once: making one takes far longer than using it. */
+const figures = new Intl.NumberFormat('en-US', { maximumSignificantDigits: 6 });
 
 /** A number as a person reads it: up to six significant digits, thousands apart, a minus instead of a hyphen. */
 export function readable(value: number): string {
@@ -9,7 +11,7 @@ export function readable(value: number): string {
   const text =
     size < 1e-6 || size >= 1e12
       ? size.toExponential().replace('e+', 'e')
-      : size.toLocaleString('en-US', { maximumSignificantDigits: 6 });
+      : figures.format(size);
   return short < 0 ? MINUS + text : text;
 }
 
