@@ -100,26 +100,51 @@ function lensesOf(
   return lenses;
 }
 
+/** A grid with the camera that it was made for. */
+interface KnownGrid {
+  readonly camera: FillCamera;
+  readonly grid: CameraGrid;
+}
+
+function sameShutters(camera: FillCamera, { camera: was }: KnownGrid): boolean {
+  return (
+    camera.shutterSlowestS === was.shutterSlowestS &&
+    camera.shutterFastestS === was.shutterFastestS &&
+    camera.syncSpeedS === was.syncSpeedS &&
+    camera.highSpeedSync === was.highSpeedSync
+  );
+}
+
+const isSamePair = (a: readonly [number, number], b: readonly [number, number]) =>
+  a[0] === b[0] && a[1] === b[1];
+
 /**
  * All marks that lie within a camera's limits. Times beyond 30 s are the scale's steps in whole seconds.
  *
  * @param camera limits, filters, sync
+ * @param before a grid of the same scale, of which what is the same is used again
  * @returns the grid; empty parts where a limit leaves no mark
  * @throws RangeError when a limit is no positive number
  * @example f/2.8 to f/4 in thirds: positions 9 to 12
  * @source ISO 516, ISO 517 and trade practice for the marks; derivation
  */
-export function cameraGrid(camera: FillCamera): CameraGrid {
+export function cameraGrid(camera: FillCamera, before?: KnownGrid): CameraGrid {
   const { scale } = camera;
   const steps = stepsPerStop(scale);
   const aperture = positions('aperture', scale, camera.apertureMin, camera.apertureMax);
   const iso = positions('iso', scale, camera.isoMin, camera.isoMax);
+  const known = before?.camera.scale === scale ? before : undefined;
+  const areLensesKnown =
+    known !== undefined &&
+    isSamePair(known.grid.aperture, aperture) &&
+    isSamePair(known.grid.iso, iso) &&
+    known.camera.ndStops === camera.ndStops;
   return {
     scale,
     steps,
     aperture,
     iso,
-    shutters: shuttersOf(camera),
-    lenses: lensesOf(aperture, iso, camera.ndStops, steps),
+    shutters: known && sameShutters(camera, known) ? known.grid.shutters : shuttersOf(camera),
+    lenses: areLensesKnown ? known.grid.lenses : lensesOf(aperture, iso, camera.ndStops, steps),
   };
 }

@@ -52,9 +52,10 @@ export function fillProblem(wish: FillWish, before?: FillProblem): FillProblem {
   const flashes = parts.rim ? wish.flashes : wish.flashes.filter(({ role }) => role !== 'rim');
   const ratio = parts.ratio ? wish.aim.ratio : null;
   const isSameCamera = before?.wish.camera === wish.camera;
+  const known = before && { camera: before.wish.camera, grid: before.grid };
   return {
     wish,
-    grid: before && isSameCamera ? before.grid : cameraGrid(wish.camera),
+    grid: before && isSameCamera ? before.grid : cameraGrid(wish.camera, known),
     tables: flashTables(flashes, wish.camera.shutCurtainS, ratio, before?.tables),
     parts,
   };

@@ -8,10 +8,7 @@ export function readable(value: number): string {
   const short = Number(value.toPrecision(6));
   const size = Math.abs(short);
   if (size === 0) return '0';
-  const text =
-    size < 1e-6 || size >= 1e12
-      ? size.toExponential().replace('e+', 'e')
-      : figures.format(size);
+  const text = size < 1e-6 || size >= 1e12 ? size.toExponential().replace('e+', 'e') : figures.format(size);
   return short < 0 ? MINUS + text : text;
 }
 
