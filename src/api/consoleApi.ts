@@ -1,7 +1,7 @@
 import createClient, { type Client } from 'openapi-fetch';
 import type { operations, paths } from '../../openapi/console';
 import { consoleFetch } from './consoleFetch';
-import { refusedBy } from './Refused';
+import { refusedBy, refusedByNetwork } from './Refused';
 
 export type ConsoleApi = Client<paths>;
 export type Account = operations['SignIn']['responses'][200]['content']['application/json']['account'];
@@ -38,7 +38,10 @@ export const consoleApi: ConsoleApi = createClient<paths>({
 export async function taken<T>(
   asked: Promise<{ data?: T; error?: unknown; response: Response }>,
 ): Promise<T> {
-  const { data, error, response } = await asked;
+  const { data, error, response } = await asked.catch((reason: unknown) => {
+    // Something in between answered in the service's place, as a hotel's sign-in page does.
+    throw reason instanceof SyntaxError ? refusedByNetwork(reason) : reason;
+  });
   if (!response.ok) throw refusedBy(response, error);
   return data as T;
 }

@@ -36,6 +36,8 @@ export const useSessionStore = defineStore('session', () => {
     account.value = next;
     if (next) hasEnded.value = false;
     remember(next?.id);
+    // From now on the session may end.
+    if (next) void client().catch(() => undefined);
   }
 
   function end(): void {

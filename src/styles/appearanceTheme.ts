@@ -61,7 +61,7 @@ export function appearanceTheme(appearance: Appearance): ThemeConfig {
   return {
     algorithm: palette.scheme === 'dark' ? theme.darkAlgorithm : theme.defaultAlgorithm,
     token: tokensOf(palette),
-    // The dark algorithm dims what it is given; a filled button has to keep its contrast.
-    components: { Button: { colorPrimary: palette.accent } },
+    // The dark algorithm dims what it is given; a button has to keep its contrast.
+    components: { Button: { colorPrimary: palette.accent, colorError: palette.fault } },
   };
 }

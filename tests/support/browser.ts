@@ -26,7 +26,12 @@ export interface VisitOptions {
   /** What was chosen on an earlier visit; none leaves it to the system's preference. */
   readonly appearance?: Appearance;
   readonly systemPrefers?: 'light' | 'dark';
+  /** Statuses of refusals that the visit provokes; any other is a complaint. */
+  readonly refusals?: readonly number[];
 }
+
+/** What Chromium writes to the console for each answer of 400 and above. */
+const REFUSED = /^Failed to load resource: the server responded with a status of (\d+)/;
 
 /** One visitor: a context of its own, with everything noted that a page must not do. */
 export interface Visit {
@@ -45,7 +50,7 @@ export function openBrowser(): Promise<Browser> {
 /** Opens a context and a page that notes its complaints from the first byte on. */
 export async function visit(
   browser: Browser,
-  { baseUrl, widthPx = 1440, appearance, systemPrefers = 'light' }: VisitOptions,
+  { baseUrl, widthPx = 1440, appearance, systemPrefers = 'light', refusals = [] }: VisitOptions,
 ): Promise<Visit> {
   const context = await browser.newContext({
     baseURL: baseUrl,
@@ -65,18 +70,22 @@ export async function visit(
   });
   if (appearance)
     await context.addInitScript((name) => {
+      // A page without an address has no storage.
+      if (location.protocol === 'about:') return;
       if (localStorage.getItem('evenfall.appearance') === null)
         localStorage.setItem('evenfall.appearance', name);
     }, appearance);
   const page = await context.newPage();
   page.setDefaultTimeout(5_000);
   page.on('console', (message) => {
-    if (message.type() === 'error' || message.type() === 'warning')
-      complaints.push(`console: ${message.text()}`);
+    if (message.type() !== 'error' && message.type() !== 'warning') return;
+    if (refusals.includes(Number(REFUSED.exec(message.text())?.[1]))) return;
+    complaints.push(`console: ${message.text()}`);
   });
   page.on('pageerror', (error) => complaints.push(`exception: ${error.message}`));
   page.on('response', (response) => {
-    if (response.status() >= 400) complaints.push(`${response.status()}: ${response.url()}`);
+    if (response.status() >= 400 && !refusals.includes(response.status()))
+      complaints.push(`${response.status()}: ${response.url()}`);
   });
   return { page, context, complaints, end: () => context.close() };
 }

@@ -24,7 +24,7 @@ const TYPES: Readonly<Record<string, string>> = {
   '.woff2': 'font/woff2',
 };
 
-async function builtClient(): Promise<string> {
+export async function builtClient(): Promise<string> {
   const given = process.env[TEST_SETTINGS];
   const folder = given ? (JSON.parse(given) as TestSettings).clientFolder : null;
   return folder ?? buildClient();

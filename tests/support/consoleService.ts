@@ -127,10 +127,11 @@ export interface ConsoleService extends TestService {
 export async function startConsole(
   overrides: Partial<Config> = {},
   logFile?: string,
+  clientFolder?: string,
 ): Promise<ConsoleService> {
   const mail = await new TestMailServer().up();
   const config = { trustProxyHops: 1, smtpUrl: mail.url, mailFrom: 'Evenfall <evenfall@example.org>' };
-  const service = await startService({ ...config, ...overrides }, undefined, logFile);
+  const service = await startService({ ...config, ...overrides }, undefined, logFile, clientFolder);
   const newBrowser = (address?: string, agent?: string) => new Browser(service.url, address, agent);
   const newAddress = () => `person-${randomBytes(6).toString('hex')}@example.org`;
   return {

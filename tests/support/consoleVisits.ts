@@ -14,12 +14,12 @@ export interface ConsoleVisits {
 }
 
 /** One served console and one Chromium for a file of tests, a context for each visit. */
-export function consoleVisits(): ConsoleVisits {
+export function consoleVisits(serve: () => Promise<ServedConsole> = serveConsole): ConsoleVisits {
   let browser: Browser;
   let served: ServedConsole;
 
   beforeAll(async () => {
-    served = await serveConsole();
+    served = await serve();
     browser = await openBrowser();
   }, 120_000);
 

@@ -86,13 +86,14 @@ export async function startService(
   overrides: Partial<Config> = {},
   given?: TestDatabase,
   logFile = '/dev/null',
+  clientFolder: string | null = null,
 ): Promise<TestService> {
   const database = given ?? (await openTestDatabase());
   const config = configFor(overrides);
   const { ownerUrl, serviceUrl } = database;
   const logFd = openSync(logFile, 'a');
   const workerFolder = pathToFileURL(`${testSettings().serverFolder}/`);
-  const service = await serve({ config, ownerUrl, serviceUrl, clientFolder: null, logFd, workerFolder });
+  const service = await serve({ config, ownerUrl, serviceUrl, clientFolder, logFd, workerFolder });
   const owner = new pg.Pool({ connectionString: ownerUrl, max: 2 });
   owner.on('error', () => undefined);
   return {

@@ -1,7 +1,12 @@
-/** A cap as it is typed: nothing is none; what is no whole number is left to the service to refuse. */
+/**
+ * A cap as it is typed; nothing is none. What is no number goes out as it stands, so that the service says what is
+ * wrong with it: JSON would turn it into none at all.
+ */
 export function readCap(text: string): number | null {
   const bare = text.replace(/[\s,]/g, '');
-  return bare === '' ? null : Number(bare);
+  if (bare === '') return null;
+  const cap = Number(bare);
+  return Number.isFinite(cap) ? cap : (bare as unknown as number);
 }
 
 /** The end of a day as its date is typed, in the reader's own zone; null for none. */
