@@ -4,6 +4,8 @@ import { defineAsyncComponent, type Component } from 'vue';
 export interface Drawing {
   readonly component: Component;
   readonly covers: readonly string[];
+  /** The example that shows most, where that is not the first one. */
+  readonly start?: number;
 }
 
 const exposure = defineAsyncComponent(() => import('./ExposureDrawing.vue'));
@@ -18,6 +20,11 @@ const drawings: Readonly<Record<string, Drawing>> = {
   'exposure/difference': {
     component: defineAsyncComponent(() => import('./DifferenceDrawing.vue')),
     covers: [],
+  },
+  'flash/motion': {
+    component: defineAsyncComponent(() => import('./MotionDrawing.vue')),
+    covers: [],
+    start: 1,
   },
   'light/convert': { component: defineAsyncComponent(() => import('./LightDrawing.vue')), covers: [] },
 };
