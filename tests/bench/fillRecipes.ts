@@ -22,7 +22,7 @@ export const fillRecipesLines: Measurement<unknown> = {
  * the process, as processor time; the second over generated requests as large and awkward as the schema allows, those
  * that are refused included.
  */
-export function benchFillRecipes(): BenchLine[] {
+function benchFillRecipes(): BenchLine[] {
   for (let seed = 1; seed <= AGAIN; seed++) ask(hostileFill(seed));
   const usual: number[] = [];
   for (let round = 0; round < ROUNDS; round++) usual.push(processorMs(threeFlashes));

@@ -13,6 +13,7 @@ const parts: Record<string, () => Promise<StartPart>> = {
   rawHttp: async () => (await import('../peers/rawHttp')).rawHttp,
   expressEcho: async () => (await import('../peers/expressEcho')).expressEcho,
   stockFull: async () => (await import('../peers/stockFull')).stockFull,
+  calculatorLoop: async () => (await import('./calculatorLoop')).calculatorLoop,
   load: async () => (await import('../load/loadPart')).loadPart,
 };
 
