@@ -2,6 +2,7 @@ import type { Page } from 'playwright-core';
 import { expect, it } from 'vitest';
 import { fillRecipes } from '../../shared/calculators/fill/recipes';
 import { encodeQuery } from '../../shared/contract/queryCodec';
+import { initialBody } from '../../src/components/fill/initialBody';
 import type { Body } from '../../src/form/body';
 import { settingsLine } from '../../src/components/fill/recipeText';
 import { askCalculator } from '../support/askCalculator';
@@ -19,6 +20,12 @@ const bestOf = (body: Body) => {
   if (!first) throw new Error('there is no recipe');
   return settingsLine(first);
 };
+
+/** How far the picture at 100 % says that the subject trails. */
+async function trailPx(page: Page): Promise<number> {
+  const words = await page.getByRole('region', { name: 'The frame at 100 %' }).textContent();
+  return Number(/trail over ([\d.]+) pixels/.exec(words ?? '')?.[1] ?? NaN);
+}
 
 const camera = {
   apertureMin: 'f/1.8',
@@ -82,7 +89,7 @@ it('leads from a typed test frame to a settings sheet on one page of paper', asy
     await page.getByRole('textbox', { name: 'Shutter', exact: true }).fill('1/30');
     await page.getByRole('textbox', { name: 'ISO', exact: true }).fill('800');
     const frame = { aperture: 'f/4', shutter: '1/30', iso: 800, offsetStops: 0 };
-    const example = fillRecipes.examples[0]?.input as Body;
+    const example = initialBody(fillRecipes.examples[0]?.input as Body);
     const expected = bestOf({ ...example, background: { testFrame: frame } });
     await expect.poll(() => bestRecipe(page)).toContain(`${expected};`);
     await page.getByRole('button', { name: 'Print the settings sheet' }).click();
@@ -178,14 +185,19 @@ it('opens what is folded away where a fault stands in it, and has the answer bac
 
 it('shows another recipe at length when it is chosen', async () => {
   await visiting({}, async (page) => {
-    await openScreen(page, address(dusk));
+    await openScreen(page, '/fill');
     const second = recipeRadios(page).nth(1);
     const words = (await second.getAttribute('aria-label')) ?? '';
+    await expect.poll(() => trailPx(page)).toBeGreaterThan(0);
+    const before = await trailPx(page);
     await second.focus();
     await page.keyboard.press('Space');
     const detail = page.getByRole('region', { name: 'Set this' });
     for (const part of words.split(';')[0]?.split(', ') ?? [])
       expect(await detail.textContent()).toContain(part);
     expect(await detail.getByRole('list').textContent()).toMatch(/first recipe/);
+    // At 1/80 s who stands trails a fifth of what they do at 1/15 s.
+    expect(await page.getByRole('img', { name: 'The frame at 100 %' }).isVisible()).toBe(true);
+    await expect.poll(() => trailPx(page)).toBeLessThan(before / 4);
   });
 });
