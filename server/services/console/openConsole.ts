@@ -6,9 +6,11 @@ import { Outbox } from '../mail/Outbox';
 import { OutboxWorker } from '../mail/OutboxWorker';
 import { WorkerPasswordHasher } from '../passwords/PasswordHasher';
 import { AttemptThrottle } from '../throttle/AttemptThrottle';
+import { alertQuotas } from '../usage/alertQuotas';
 import type { ConsoleServices } from './ConsoleServices';
-import { Housekeeping } from './Housekeeping';
 import { openLocalMailbox, type ReadableMailbox } from './openLocalMailbox';
+import { Periodic } from './Periodic';
+import { tidyUp } from './tidyUp';
 
 export interface ConsoleOptions {
   readonly config: Config;
@@ -32,6 +34,8 @@ export interface Console {
 /** OWASP's advice for bcrypt is a cost of 10 and more; 12 takes a quarter of a second here. Tests hash often. */
 const COST = 12;
 const COST_UNDER_TESTS = 4;
+const MINUTE_MS = 60_000;
+const HOUR_MS = 60 * MINUTE_MS;
 
 /** Connects what the console works with, and starts what runs behind it. */
 export async function openConsole(options: ConsoleOptions): Promise<Console> {
@@ -56,18 +60,29 @@ export async function openConsole(options: ConsoleOptions): Promise<Console> {
           publicUrl,
           onTrouble: (reason) => onTrouble('a mail was not sent', reason),
         });
-  const housekeeping = new Housekeeping(database, outbox, publicUrl, (reason) =>
-    onTrouble('the housekeeping failed', reason),
-  );
+  const tidying = new Periodic({
+    work: () => tidyUp(database, outbox, publicUrl),
+    everyMs: HOUR_MS,
+    firstMs: 20_000,
+    onTrouble: (reason) => onTrouble('the housekeeping failed', reason),
+  });
+  const alerting = new Periodic({
+    work: async () => void (await alertQuotas(database, outbox, publicUrl)),
+    everyMs: MINUTE_MS,
+    firstMs: MINUTE_MS,
+    onTrouble: (reason) => onTrouble('the quotas were not looked at', reason),
+  });
   if (adminEmail !== null) await grantAdmin(database, adminEmail);
   worker?.start();
-  housekeeping.start();
+  tidying.start();
+  alerting.start();
   const settings = { publicUrl, sessionSecret, adminEmail };
   return {
     services: { database, hasher, throttle: new AttemptThrottle(database.sequelize), outbox, settings, now },
     mailbox: local?.mailbox ?? null,
     stop: async () => {
-      await housekeeping.stop();
+      await tidying.stop();
+      await alerting.stop();
       await worker?.stop();
       await local?.close();
       await hasher.close();

@@ -1,3 +1,5 @@
+import { readable } from './format';
+
 /** A mail before it is set as text and as HTML: sentences, and one thing to press. */
 export interface MailWords {
   readonly subject: string;
@@ -8,6 +10,14 @@ export interface MailWords {
 interface Linked {
   readonly link: string;
   readonly minutes: number;
+}
+
+interface Quota {
+  readonly used: number;
+  readonly limit: number;
+  /** The first day of the next month. */
+  readonly resetsOn: string;
+  readonly link: string;
 }
 
 const IGNORE = 'If this was not you, leave this mail alone: nothing happens.';
@@ -99,6 +109,30 @@ export const mails = {
       'Rotate it in time: the new key works beside the old one for as long as you choose.',
     ],
     action: { label: 'Look at the key', link: p.link },
+  }),
+  quota_will_end: (p: Quota & { endsOn: string }): MailWords => ({
+    subject: 'At this pace your Evenfall units end before the month does',
+    paragraphs: [
+      `${readable(p.used)} of this month’s ${readable(p.limit)} units are used. At this pace they end on ${p.endsOn} (UTC); a new month begins on ${p.resetsOn}.`,
+      'Look at what uses them, or ask for another plan.',
+    ],
+    action: { label: 'Look at the usage', link: p.link },
+  }),
+  quota_nearly_used: (p: Quota): MailWords => ({
+    subject: 'Four fifths of your Evenfall units are used',
+    paragraphs: [
+      `${readable(p.used)} of this month’s ${readable(p.limit)} units are used. When all are, calls get 429 until ${p.resetsOn} (UTC).`,
+      'Look at what uses them, or ask for another plan.',
+    ],
+    action: { label: 'Look at the usage', link: p.link },
+  }),
+  quota_used_up: (p: Quota): MailWords => ({
+    subject: 'Your Evenfall units of this month are used up',
+    paragraphs: [
+      `All ${readable(p.limit)} units of this month are used. Calls get 429 until ${p.resetsOn} (UTC), when a new month begins.`,
+      'Another plan can be asked for; nothing is charged by itself.',
+    ],
+    action: { label: 'Look at the usage', link: p.link },
   }),
   account_closed: (_p: Record<string, never>): MailWords => ({
     subject: 'Your Evenfall account is closed',
