@@ -72,6 +72,21 @@ function casesWithin(problem: FillProblem, most: MissLimits): BoundedCase[] {
   return cases;
 }
 
+/** Cases from the least bound on; there are far fewer bounds than cases. */
+function* inOrder(
+  cases: readonly BoundedCase[],
+  boundOf: (bound: MissLimits) => number,
+): Generator<BoundedCase> {
+  const byBound = new Map<number, BoundedCase[]>();
+  for (const one of cases) {
+    const bound = boundOf(one.bound);
+    const alike = byBound.get(bound);
+    if (alike) alike.push(one);
+    else byBound.set(bound, [one]);
+  }
+  for (const bound of [...byBound.keys()].sort((a, b) => a - b)) yield* byBound.get(bound) ?? [];
+}
+
 /**
  * The least miss over all cases; null where none keeps within `most`. Cases are taken in the order of their bounds, and
  * only one that may be better is worked out.
@@ -84,8 +99,7 @@ function leastOver(
   limitsAt: (count: number) => MissLimits,
 ): number | null {
   let best = most + 1;
-  const sorted = [...cases].sort((a, b) => boundOf(a.bound) - boundOf(b.bound));
-  for (const { lens, shutter, bound } of sorted) {
+  for (const { lens, shutter, bound } of inOrder(cases, boundOf)) {
     const least = boundOf(bound);
     if (least >= best) break;
     const one = caseOf(problem, lens, shutter);

@@ -90,13 +90,6 @@ export function keysFor(b: MixBounds, l1: number, l2: number): readonly [number,
   return [least, Math.min(b.sumHigh - atMost, b.ratioHigh * atMost)];
 }
 
-/** Whether any way to set the keys gives something from `least` to `most`. */
-function hasKeyBetween(keys: RoleSums, least: number, most: number, needsKey: boolean): boolean {
-  const last = lastAtMost(keys.low, most);
-  // Off stands first, and an entry that is on is never below it.
-  return last >= (needsKey ? 1 : 0) && (keys.reach[last] ?? 0) >= least;
-}
-
 /** Goes through the ways to set the fills that bounds leave room for, each with its keys; true from `visit` ends it. */
 export function someFill(
   { fills, keys }: FlashGroup,
@@ -134,5 +127,15 @@ export function isMixed(group: FlashGroup, bounds: MixBounds): boolean {
   if (bounds.sumHigh < 0) return false;
   const isSwapped = group.keys.low.length < group.fills.low.length;
   const [mixed, b] = isSwapped ? [swappedGroup(group), swappedBounds(bounds)] : [group, bounds];
-  return someFill(mixed, b, (_, least, most) => hasKeyBetween(mixed.keys, least, most, b.needsKey));
+  const { low, reach } = mixed.keys;
+  // Off stands first, and an entry that is on is never below it.
+  const first = b.needsKey ? 1 : 0;
+  let last: number | null = null;
+  return someFill(mixed, b, (_, least, most) => {
+    // From one fill to the next the most moves little, and seldom back.
+    last ??= lastAtMost(low, most);
+    while (last >= 0 && (low[last] ?? 0) > most) last--;
+    while (last + 1 < low.length && (low[last + 1] ?? 0) <= most) last++;
+    return last >= first && (reach[last] ?? 0) >= least;
+  });
 }
