@@ -8,7 +8,7 @@ import {
   type FillProblem,
 } from './fillProblem';
 import { halfStep, onAimCount } from './fillScore';
-import type { FillSearch } from './fillSearch';
+import { isReachable, type FillSearch } from './fillSearch';
 import type { FillAim, FillWish } from './fillTypes';
 import { bestOf, type FillLimit, type LimitInTheWay } from './limitInTheWay';
 
@@ -73,9 +73,11 @@ export function aimsGivenUp({ problem }: FillSearch): (LimitInTheWay | null)[] {
   const { aim, scene } = wish;
   const front = frontMiss(problem) ?? 0;
   const room = backgroundRoom(problem) ?? 0;
+  const most = { main: onAimCount(problem.grid), beside: onAimCount(problem.grid) };
   const give = (isAsked: boolean, limit: FillLimit, shortByStops: number | null, changed: FillWish) => {
-    const best = isAsked ? bestOf(fillProblem(changed, problem), aim) : null;
-    return best && best.leavesStops === 0 ? { limit, shortByStops, ...best } : null;
+    const other = isAsked ? fillProblem(changed, problem) : null;
+    const best = other && isReachable(other, most) ? bestOf(other, aim) : null;
+    return best && { limit, shortByStops, ...best };
   };
   const shaded = { ...wish, scene: { ...scene, subjectEv100: scene.subjectEv100 - front } };
   const otherBackground = withAim(wish, { backgroundStops: aim.backgroundStops + room });

@@ -1,5 +1,5 @@
 import { ABSENT_COUNT, factorAt } from './fillMisses';
-import { firstAtLeast, lastAtMost, type RoleSums } from './roleSums';
+import { firstAtLeast, lastAtMostFrom, type RoleSums } from './roleSums';
 
 /** What the flashes of one part have to do, in the light of the flash levels. */
 export interface FlashTask {
@@ -132,10 +132,7 @@ export function isMixed(group: FlashGroup, bounds: MixBounds): boolean {
   const first = b.needsKey ? 1 : 0;
   let last: number | null = null;
   return someFill(mixed, b, (_, least, most) => {
-    // From one fill to the next the most moves little, and seldom back.
-    last ??= lastAtMost(low, most);
-    while (last >= 0 && (low[last] ?? 0) > most) last--;
-    while (last + 1 < low.length && (low[last + 1] ?? 0) <= most) last++;
+    last = lastAtMostFrom(low, most, last);
     return last >= first && (reach[last] ?? 0) >= least;
   });
 }

@@ -9,7 +9,7 @@ import {
   type MixBounds,
 } from './flashMix';
 import { isTooWeak, type FlashLimit } from './limits';
-import { lastAtMost, type RoleSums } from './roleSums';
+import { lastAtMostFrom, type RoleSums } from './roleSums';
 
 /** Farther than any flash can be moved. */
 const MOST_STOPS = 60;
@@ -17,14 +17,14 @@ const MOST_STOPS = 60;
 const alike = (count: number) => ({ sum: count, ratio: count });
 
 /** By how much the nearest weaker way falls short of a span of light, stops. */
-function weakerBy({ low, reach }: RoleSums, least: number, most: number): number {
-  const nearest = reach[lastAtMost(low, most)] ?? 0;
+function weakerBy({ reach }: RoleSums, last: number, least: number): number {
+  const nearest = reach[last] ?? 0;
   return nearest > 0 ? Math.max(0, Math.log2(least / nearest)) : Infinity;
 }
 
 /** By how much the nearest stronger way exceeds a span of light, stops. */
-function strongerBy({ low }: RoleSums, least: number, most: number): number {
-  const nearest = low[lastAtMost(low, most) + 1];
+function strongerBy({ low }: RoleSums, last: number, least: number, most: number): number {
+  const nearest = low[last + 1];
   return nearest === undefined || !(most > 0) ? Infinity : Math.log2(nearest / Math.max(most, least));
 }
 
@@ -38,9 +38,14 @@ function roleOff(group: FlashGroup, b: MixBounds, isWeak: boolean, best: number)
   const most = isWeak ? keyMost * 2 ** best : keyMost;
   const unbounded = { fills: group.fills, keys: { ...group.keys, reach: Float64Array.of(most) } };
   let off = best;
+  let last: number | null = null;
   someFill(unbounded, b, (_, leastKey, mostKey) => {
-    off = Math.min(off, (isWeak ? weakerBy : strongerBy)(group.keys, leastKey, mostKey));
-    return false;
+    last = lastAtMostFrom(group.keys.low, mostKey, last);
+    off = Math.min(
+      off,
+      isWeak ? weakerBy(group.keys, last, leastKey) : strongerBy(group.keys, last, leastKey, mostKey),
+    );
+    return off <= 0;
   });
   return off;
 }

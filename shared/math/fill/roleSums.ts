@@ -172,3 +172,11 @@ export function lastAtMost(rising: Float64Array, value: number): number {
   }
   return first - 1;
 }
+
+/** The same, looked for from a place that is likely near it: from one search to the next the value moves little. */
+export function lastAtMostFrom(rising: Float64Array, value: number, place: number | null): number {
+  let last = place ?? lastAtMost(rising, value);
+  while (last >= 0 && (rising[last] ?? 0) > value) last--;
+  while (last + 1 < rising.length && (rising[last + 1] ?? 0) <= value) last++;
+  return last;
+}
