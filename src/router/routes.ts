@@ -102,19 +102,19 @@ export const routes: readonly RouteRecordRaw[] = [
     path: '/usage',
     name: 'usage',
     component: () => import('../views/UsageView.vue'),
-    meta: { title: 'Usage', isOwn: true },
+    meta: { title: 'Usage', isOwn: true, roles: ['developer'] },
   },
   {
     path: '/plan',
     name: 'plan',
     component: () => import('../views/PlanView.vue'),
-    meta: { title: 'Plan', isOwn: true },
+    meta: { title: 'Plan', isOwn: true, roles: ['developer'] },
   },
   {
     path: '/try',
     name: 'try',
     component: () => import('../views/TryView.vue'),
-    meta: { title: 'Try it', isOwn: true },
+    meta: { title: 'Try it', isOwn: true, roles: ['developer'] },
   },
   {
     path: '/:rest(.*)*',

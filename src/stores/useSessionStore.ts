@@ -1,6 +1,6 @@
 import { defineStore } from 'pinia';
 import { computed, ref } from 'vue';
-import type { Account } from '../api/consoleApi';
+import type * as Api from '../api/consoleApi';
 import type { Role } from '../router/navigation';
 
 /** Tells the next page, and other tabs, who was signed in here; strangers cost no request. */
@@ -25,14 +25,14 @@ function remember(id: string | undefined): void {
 
 /** Who is signed in. */
 export const useSessionStore = defineStore('session', () => {
-  const account = ref<Account | null>(null);
+  const account = ref<Api.Account | null>(null);
   const roles = computed<readonly Role[]>(() => account.value?.roles ?? []);
   /** Whether a session ended in the middle of this visit, other than by signing out. */
   const hasEnded = ref(false);
   let asking: Promise<void> | null = null;
   let hasAsked = false;
 
-  function take(next: Account | null): void {
+  function take(next: Api.Account | null): void {
     account.value = next;
     if (next) hasEnded.value = false;
     remember(next?.id);
@@ -45,13 +45,19 @@ export const useSessionStore = defineStore('session', () => {
     take(null);
   }
 
-  let isListening = false;
+  let fetching: Promise<typeof Api> | null = null;
   /** Comes with the first request, not with the first page. */
   async function client() {
-    const api = await import('../api/consoleApi');
-    if (!isListening) api.onSessionEnd(end);
-    isListening = true;
-    return api;
+    fetching ??= import('../api/consoleApi').then((api) => {
+      api.onSessionEnd(end);
+      return api;
+    });
+    try {
+      return await fetching;
+    } catch (error) {
+      fetching = null;
+      throw error;
+    }
   }
 
   async function ask(): Promise<void> {
@@ -74,7 +80,7 @@ export const useSessionStore = defineStore('session', () => {
   }
 
   /** Asks who is signed in, for screens that are somebody's own. */
-  async function require(): Promise<Account | null> {
+  async function require(): Promise<Api.Account | null> {
     if (!account.value) await askOnce();
     return account.value;
   }

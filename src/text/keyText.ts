@@ -1,4 +1,5 @@
 import { calculatorGroup } from './calculatorGroups';
+import { formatDay } from './formatMoment';
 
 /** What a key's state means for calls. */
 const STATES = {
@@ -12,6 +13,15 @@ const STATES = {
 export type KeyState = keyof typeof STATES;
 
 export const keyStateText = (state: KeyState): string => STATES[state];
+
+/** A key's state with the day on which its time is over, or was. */
+export function keyStateLine(state: KeyState, expiresAt: string | null): string {
+  const text = keyStateText(state);
+  if (expiresAt === null || state === 'revoked') return text;
+  return state === 'expired'
+    ? `${text} on ${formatDay(expiresAt)}`
+    : `${text}, until ${formatDay(expiresAt)}`;
+}
 
 /** Whether no call with it will be answered any more. */
 export const hasEnded = (state: KeyState): boolean => state === 'expired' || state === 'revoked';
