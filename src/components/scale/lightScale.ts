@@ -21,6 +21,8 @@ export interface Span {
   readonly isLit: boolean;
   /** Words beside the stretch, which then has a lane of its own. */
   readonly label?: string;
+  /** What it says, where its ends on the axis are not what they stand for. */
+  readonly words?: string;
 }
 
 /** A caption under the axis, by which the numbers get a meaning. */

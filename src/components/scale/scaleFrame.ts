@@ -16,6 +16,8 @@ export interface Tick {
 /** Thirds are drawn from this distance between stops on; closer together they would only be grey. */
 const THIRDS_FROM_PX = 21;
 const NUMBERS_APART_PX = 40;
+/** Closer together, single steps would be grey too, and there may be thousands of them. */
+const STEPS_FROM_PX = 4;
 
 /** How many pixels one stop takes. */
 export function pxPerStop({ fromStops, toStops, widthPx, padPx }: ScaleFrame): number {
@@ -36,19 +38,22 @@ export function heldWithin(frame: ScaleFrame, stops: number): { stops: number; i
 /** Every how many stops a number stands, so that the numbers do not touch. */
 export function numberedEvery(frame: ScaleFrame): number {
   const stopPx = pxPerStop(frame);
-  return [1, 2, 5, 10, 20].find((every) => every * stopPx >= NUMBERS_APART_PX) ?? 50;
+  const decades = [1, 10, 100, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8];
+  const steps = decades.flatMap((ten) => [ten, 2 * ten, 5 * ten]);
+  return steps.find((every) => every * stopPx >= NUMBERS_APART_PX) ?? 1e9;
 }
 
-/** The ruling: thirds where there is room, stops, and the numbered ones among them. */
-export function ticksOf(frame: ScaleFrame): Tick[] {
-  const perStop = pxPerStop(frame) >= THIRDS_FROM_PX ? 3 : 1;
+/** The ruling: thirds where there is room, stops, and the numbered ones among them; these alone where it is close. */
+export function ticksOf(frame: ScaleFrame, parts: 1 | 3 = 3): Tick[] {
   const every = numberedEvery(frame);
+  const stopPx = pxPerStop(frame);
+  const perStop = stopPx >= THIRDS_FROM_PX ? parts : stopPx >= STEPS_FROM_PX ? 1 : 1 / every;
   const first = Math.ceil(frame.fromStops * perStop);
   const last = Math.floor(frame.toStops * perStop);
   return Array.from({ length: Math.max(0, last - first + 1) }, (_, i) => {
     const step = first + i;
-    const stops = step / perStop;
-    const isStop = step % perStop === 0;
+    const stops = perStop < 1 ? step * every : step / perStop;
+    const isStop = Number.isInteger(stops);
     return {
       stops,
       xPx: xOf(frame, stops),

@@ -83,7 +83,7 @@ it('the scale is told in words: what stands where, and what is lit', () => {
   const words = lightScaleText(
     [{ id: 'now', title: 'Now', stops: -2.5, kind: 'light' }],
     [{ id: 'gone', title: 'light that has gone', fromStops: -2.5, toStops: 16, isLit: false }],
-    'EV at ISO 100',
+    { unit: 'EV at ISO 100' },
   );
   expect(words).toBe(
     'In EV at ISO 100, more light to the right: Now at −2.5; light that has gone, unlit, from −2.5 to 16.',

@@ -1,0 +1,98 @@
+import { ev100OfIlluminance } from '../../../../shared/math/exposure';
+import { combinedEv100 } from '../../../../shared/math/ladder/sceneModel';
+import { naturalLight } from '../../../../shared/math/ladder/naturalLight';
+import { skyLight } from '../../../../shared/math/skyLight';
+import { sunPosition } from '../../../../shared/math/sunPosition';
+import type { Place } from '../../../../shared/math/sunSite';
+import type { LadderAnswer, Rung } from '../../../form/eveningAnswers';
+import type { PlotPoint, PlotTick, Range } from './plotFrame';
+import { pointsOf } from './plotFrame';
+
+const HOUR_MS = 3_600_000;
+const MINUTE_MS = 60_000;
+/** By incident light, as the ladder counts it. */
+const INCIDENT_C = 250;
+
+/** The sun's altitude over a span of milliseconds since 1970. */
+export function sunCurve(place: Place, across: Range): PlotPoint[] {
+  return pointsOf((ms) => sunPosition(place, ms).altitudeDeg, across, 144);
+}
+
+/** EV100 of level ground under a clear sky over the same span. */
+export function skyCurve(place: Place, across: Range): PlotPoint[] {
+  const lightAt = (ms: number) => skyLight(sunPosition(place, ms).altitudeDeg).illuminanceLux;
+  return pointsOf((ms) => ev100OfIlluminance(lightAt(ms), INCIDENT_C), across, 288);
+}
+
+/** When lamps are lit, where the request says so. */
+export interface LampSpan {
+  readonly onMs: number;
+  readonly offMs?: number;
+}
+
+/** The scene's EV100 by the ladder's model: sky, moon and lamps. */
+export function sceneCurve(
+  place: Place,
+  model: LadderAnswer['model'],
+  lamps: LampSpan | null,
+  across: Range,
+): PlotPoint[] {
+  const light = naturalLight(place, ...across);
+  const areLit = (ms: number) => !lamps || (ms >= lamps.onMs && ms < (lamps.offMs ?? Infinity));
+  return pointsOf(
+    (ms) =>
+      combinedEv100(light.ev100At(ms), model.skyOffsetStops, areLit(ms) ? model.lampFloorEv100 : null),
+    across,
+    240,
+  );
+}
+
+/** A rung as a tread: the light that its settings render as wished. */
+export interface Tread {
+  readonly fromMs: number;
+  readonly toMs: number;
+  readonly ev100: number;
+}
+
+/** Rungs as treads on the scale of the scene's light. */
+export function treadsOf(rungs: readonly Rung[]): Tread[] {
+  return rungs.map(({ at, until, sceneEv100, errorStops }) => ({
+    fromMs: Date.parse(at),
+    toMs: Date.parse(until),
+    ev100: sceneEv100 - errorStops,
+  }));
+}
+
+/** The steps of a ladder in a drawing's own pixels: along each tread, then straight to the next. */
+export function stepPath(
+  treads: readonly Tread[],
+  place: { readonly x: (value: number) => number; readonly y: (value: number) => number },
+): string {
+  return treads
+    .map(({ fromMs, toMs, ev100 }, i) => {
+      const y = place.y(ev100).toFixed(1);
+      return `${i === 0 ? 'M' : 'L'}${place.x(fromMs).toFixed(1)} ${y}H${place.x(toMs).toFixed(1)}`;
+    })
+    .join('');
+}
+
+/** Whole stops around what a drawing shows. */
+export function stopsRange(values: readonly number[]): Range {
+  return [Math.floor(Math.min(...values) - 0.4), Math.ceil(Math.max(...values) + 0.4)];
+}
+
+/** Round clock times along a span, as the place's clock shows them. */
+export function clockTicks([fromMs, toMs]: Range, read: (ms: number) => string): PlotTick[] {
+  const steps = [5, 10, 15, 30, 60, 120, 180].map((minutes) => minutes * MINUTE_MS);
+  const step = steps.find((size) => (toMs - fromMs) / size <= 9) ?? 3 * HOUR_MS;
+  const ticks: PlotTick[] = [];
+  // Offsets of zones are whole quarters of an hour; the clock's own round times are found from minutes past midnight.
+  for (let ms = Math.ceil(fromMs / (15 * MINUTE_MS)) * 15 * MINUTE_MS; ms <= toMs; ms += minuteStep(step)) {
+    const label = read(ms);
+    const [hour = 0, minute = 0] = label.split(':').map(Number);
+    if ((hour * 60 + minute) % (step / MINUTE_MS) === 0) ticks.push({ value: ms, label });
+  }
+  return ticks;
+}
+
+const minuteStep = (stepMs: number) => Math.min(stepMs, 15 * MINUTE_MS) % (15 * MINUTE_MS) || 15 * MINUTE_MS;
