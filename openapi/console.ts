@@ -465,6 +465,96 @@ export interface paths {
         patch?: never;
         trace?: never;
     };
+    "/api/kit": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /** The gear of the account; version 0 where nothing was kept yet */
+        get: operations["ReadKit"];
+        /** Keep the gear of the account, as changed from a version */
+        put: operations["KeepKit"];
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/api/saved": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /** Saved recipes and evenings, the latest first */
+        get: operations["ListSaved"];
+        put?: never;
+        /** Save a recipe’s or an evening’s question under a name */
+        post: operations["Save"];
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/api/saved/{id}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /** One saved thing */
+        get: operations["ReadSaved"];
+        put?: never;
+        post?: never;
+        /** Remove a saved thing for good, and its link with it */
+        delete: operations["DropSaved"];
+        options?: never;
+        head?: never;
+        /** Rename a saved thing, or put another question in its place, as changed from a version */
+        patch: operations["ChangeSaved"];
+        trace?: never;
+    };
+    "/api/saved/{id}/link": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        get?: never;
+        put?: never;
+        /** Let whoever has the link read this; asking again gives the same link */
+        post: operations["Share"];
+        /** Make the link worthless; a later one is another */
+        delete: operations["Unshare"];
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
+    "/api/shared/{token}": {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        /** What stands behind a link, without whose it is */
+        get: operations["ReadShared"];
+        put?: never;
+        post?: never;
+        delete?: never;
+        options?: never;
+        head?: never;
+        patch?: never;
+        trace?: never;
+    };
 }
 export type webhooks = Record<string, never>;
 export interface components {
@@ -482,7 +572,7 @@ export interface components {
             /** @description the request id, as a URN */
             instance: string;
             /** @enum {string} */
-            code: "malformed_json" | "malformed_request" | "key_missing" | "key_invalid" | "key_expired" | "key_revoked" | "session_missing" | "session_ended" | "credentials_wrong" | "not_same_origin" | "role_missing" | "password_wrong" | "origin_not_allowed" | "server_key_in_browser" | "scope_missing" | "account_blocked" | "not_found" | "method_not_allowed" | "already_made" | "request_waiting" | "key_settled" | "too_many_keys" | "link_not_valid" | "too_large" | "unsupported_media_type" | "invalid_input" | "rate_limited" | "too_many_attempts" | "quota_exhausted" | "key_cap_reached" | "internal_error" | "unavailable";
+            code: "malformed_json" | "malformed_request" | "key_missing" | "key_invalid" | "key_expired" | "key_revoked" | "session_missing" | "session_ended" | "credentials_wrong" | "not_same_origin" | "role_missing" | "password_wrong" | "origin_not_allowed" | "server_key_in_browser" | "scope_missing" | "account_blocked" | "not_found" | "method_not_allowed" | "already_made" | "changed_meanwhile" | "too_much_saved" | "request_waiting" | "key_settled" | "too_many_keys" | "link_not_valid" | "too_large" | "unsupported_media_type" | "invalid_input" | "rate_limited" | "too_many_attempts" | "quota_exhausted" | "key_cap_reached" | "internal_error" | "unavailable";
             /** @description every fault of the input */
             errors?: {
                 /** @description JSON Pointer into the body, or /name of a query field */
@@ -557,7 +647,7 @@ export interface components {
                 "application/problem+json": components["schemas"]["Problem"];
             };
         };
-        /** @description `already_made`, `request_waiting`, `key_settled`, `too_many_keys` */
+        /** @description `already_made`, `changed_meanwhile`, `too_much_saved`, `request_waiting`, `key_settled`, `too_many_keys` */
         Problem409: {
             headers: {
                 "X-Request-Id": components["headers"]["X-Request-Id"];
@@ -1393,6 +1483,29 @@ export interface operations {
                             lastUsedAt: string | null;
                             revokedAt: string | null;
                             replacedBy: string | null;
+                        }[];
+                        kit: {
+                            [key: string]: unknown;
+                        };
+                        saved: {
+                            /** Format: uuid */
+                            id: string;
+                            /**
+                             * Kind
+                             * @enum {string}
+                             */
+                            kind: "recipe" | "evening";
+                            name: string;
+                            version: number;
+                            /** Format: date-time */
+                            createdAt: string;
+                            /** Format: date-time */
+                            updatedAt: string;
+                            /** @description where whoever has it may read the thing; null: not shared */
+                            link: string | null;
+                            body: {
+                                [key: string]: unknown;
+                            };
                         }[];
                         planRequests: {
                             /** Format: uuid */
@@ -2490,6 +2603,683 @@ export interface operations {
             404: components["responses"]["Problem404"];
             413: components["responses"]["Problem413"];
             415: components["responses"]["Problem415"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    ReadKit: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description The gear of the account; version 0 where nothing was kept yet */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        kit: {
+                            [key: string]: unknown;
+                        };
+                        version: number;
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    KeepKit: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                "application/json": {
+                    kit: {
+                        /**
+                         * Cameras
+                         * @default []
+                         */
+                        cameras?: {
+                            /** Name */
+                            name: string;
+                            /** Sensor’s width */
+                            sensorWidthMm: number;
+                            /** Sensor’s height */
+                            sensorHeightMm: number;
+                            /** Pixels across */
+                            pixelsAcross: number;
+                            /**
+                             * Lowest ISO
+                             * @description ISO arithmetic speed
+                             */
+                            isoMin: number;
+                            /**
+                             * Highest ISO
+                             * @description that you would use
+                             */
+                            isoMax: number;
+                            /**
+                             * Slowest shutter
+                             * @description that you would use
+                             */
+                            shutterSlowest: number | string;
+                            /**
+                             * Fastest shutter
+                             * @description exposure time, in seconds or as text such as "1/125" or "2s"
+                             */
+                            shutterFastest: number | string;
+                            /**
+                             * Sync speed
+                             * @description exposure time, in seconds or as text such as "1/125" or "2s"
+                             */
+                            syncSpeed: number | string;
+                            /** High-speed sync */
+                            highSpeedSync?: {
+                                /**
+                                 * Curtain travel
+                                 * @description of one curtain; the shorter of 1/300 s and the sync speed where left out
+                                 */
+                                curtainS?: number;
+                                /**
+                                 * Extra loss
+                                 * @description what high-speed sync loses beyond the energy model, as measured; 0 where left out
+                                 */
+                                extraLossStops?: number;
+                            };
+                        }[];
+                        /**
+                         * Lenses
+                         * @default []
+                         */
+                        lenses?: {
+                            /** Name */
+                            name: string;
+                            /** Focal length */
+                            focalLengthMm: number;
+                            /**
+                             * Longest focal length
+                             * @description of a zoom
+                             */
+                            longestFocalLengthMm?: number;
+                            /**
+                             * Widest aperture
+                             * @description f-number, as a number or as text such as "f/5.6"
+                             */
+                            apertureMin: number | string;
+                            /**
+                             * Smallest aperture
+                             * @description f-number, as a number or as text such as "f/5.6"
+                             */
+                            apertureMax: number | string;
+                        }[];
+                        /**
+                         * Flashes
+                         * @default []
+                         */
+                        flashes?: ({
+                            /** Name */
+                            name: string;
+                            /**
+                             * Guide number
+                             * @description f-number times metres at ISO 100 and full power, at the zoom or reflector in use; a list of guns adds as the root of the sum of squares
+                             */
+                            guideNumberM?: number | number[];
+                            /**
+                             * Energy
+                             * @description of the capacitors, instead of a guide number
+                             */
+                            energyWs?: number;
+                            /**
+                             * Efficacy
+                             * @description light for the energy; 15 to 50 as read for studio systems
+                             */
+                            efficacyLmSPerWs?: number;
+                            /**
+                             * Measured guide numbers
+                             * @description with a modifier in place, from test frames
+                             */
+                            measured?: {
+                                /** Modifier */
+                                modifier: string;
+                                /** Guide number */
+                                guideNumberM: number;
+                            }[];
+                            /**
+                             * Least power
+                             * @description fraction of full power, above 0 up to 1, or text such as "1/16" or "1/16+1/3"
+                             */
+                            minPower: number | string;
+                            /**
+                             * Power step
+                             * @description between two powers; 0.333 means a third
+                             * @default 0.3333333333333333
+                             */
+                            powerStep?: number;
+                            /**
+                             * Duration t0.5
+                             * @description at full power
+                             */
+                            t05S?: number;
+                            /**
+                             * Control of power
+                             * @description decay: the whole capacitor empties, an exponential; cutoff: the tube is switched off early, so less power is shorter; voltage: the capacitor is charged less, so less power is longer
+                             * @default decay
+                             * @enum {string}
+                             */
+                            control?: "decay" | "cutoff" | "voltage";
+                            /**
+                             * Recycling
+                             * @description after full power
+                             */
+                            recycleFullS?: number;
+                        } & (unknown | unknown))[];
+                        /**
+                         * Modifiers
+                         * @default []
+                         */
+                        modifiers?: {
+                            /** Name */
+                            name: string;
+                            /**
+                             * Loss
+                             * @description as you measured it, with the flash that you use
+                             */
+                            lossStops: number;
+                        }[];
+                        /**
+                         * Filters
+                         * @default []
+                         */
+                        filters?: {
+                            /** Name */
+                            name: string;
+                            /** Neutral density */
+                            ndStops: number;
+                        }[];
+                        /**
+                         * Batteries
+                         * @default []
+                         */
+                        batteries?: {
+                            /** Name */
+                            name: string;
+                            /**
+                             * Pops at full power
+                             * @description on one charge
+                             */
+                            fullPops: number;
+                        }[];
+                    };
+                    /** Version that was changed */
+                    version: number;
+                };
+            };
+        };
+        responses: {
+            /** @description Keep the gear of the account, as changed from a version */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        kit: {
+                            [key: string]: unknown;
+                        };
+                        version: number;
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            409: components["responses"]["Problem409"];
+            413: components["responses"]["Problem413"];
+            415: components["responses"]["Problem415"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    ListSaved: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Saved recipes and evenings, the latest first */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        things: {
+                            /** Format: uuid */
+                            id: string;
+                            /**
+                             * Kind
+                             * @enum {string}
+                             */
+                            kind: "recipe" | "evening";
+                            name: string;
+                            version: number;
+                            /** Format: date-time */
+                            createdAt: string;
+                            /** Format: date-time */
+                            updatedAt: string;
+                            /** @description where whoever has it may read the thing; null: not shared */
+                            link: string | null;
+                        }[];
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    Save: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path?: never;
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                "application/json": {
+                    /**
+                     * Kind
+                     * @enum {string}
+                     */
+                    kind: "recipe" | "evening";
+                    /** Name */
+                    name: string;
+                    /**
+                     * Question
+                     * @description as its calculator takes it
+                     */
+                    body: {
+                        [key: string]: unknown;
+                    };
+                };
+            };
+        };
+        responses: {
+            /** @description Save a recipe’s or an evening’s question under a name */
+            201: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    Location: components["headers"]["Location"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        thing: {
+                            /** Format: uuid */
+                            id: string;
+                            /**
+                             * Kind
+                             * @enum {string}
+                             */
+                            kind: "recipe" | "evening";
+                            name: string;
+                            version: number;
+                            /** Format: date-time */
+                            createdAt: string;
+                            /** Format: date-time */
+                            updatedAt: string;
+                            /** @description where whoever has it may read the thing; null: not shared */
+                            link: string | null;
+                            body: {
+                                [key: string]: unknown;
+                            };
+                        };
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            409: components["responses"]["Problem409"];
+            413: components["responses"]["Problem413"];
+            415: components["responses"]["Problem415"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    ReadSaved: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description One saved thing */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        thing: {
+                            /** Format: uuid */
+                            id: string;
+                            /**
+                             * Kind
+                             * @enum {string}
+                             */
+                            kind: "recipe" | "evening";
+                            name: string;
+                            version: number;
+                            /** Format: date-time */
+                            createdAt: string;
+                            /** Format: date-time */
+                            updatedAt: string;
+                            /** @description where whoever has it may read the thing; null: not shared */
+                            link: string | null;
+                            body: {
+                                [key: string]: unknown;
+                            };
+                        };
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            404: components["responses"]["Problem404"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    DropSaved: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Remove a saved thing for good, and its link with it */
+            204: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content?: never;
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            404: components["responses"]["Problem404"];
+            413: components["responses"]["Problem413"];
+            415: components["responses"]["Problem415"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    ChangeSaved: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                "application/json": {
+                    /** Name */
+                    name?: string;
+                    /**
+                     * Question
+                     * @description as its calculator takes it
+                     */
+                    body?: {
+                        [key: string]: unknown;
+                    };
+                    /** Version that was changed */
+                    version: number;
+                };
+            };
+        };
+        responses: {
+            /** @description Rename a saved thing, or put another question in its place, as changed from a version */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        thing: {
+                            /** Format: uuid */
+                            id: string;
+                            /**
+                             * Kind
+                             * @enum {string}
+                             */
+                            kind: "recipe" | "evening";
+                            name: string;
+                            version: number;
+                            /** Format: date-time */
+                            createdAt: string;
+                            /** Format: date-time */
+                            updatedAt: string;
+                            /** @description where whoever has it may read the thing; null: not shared */
+                            link: string | null;
+                            body: {
+                                [key: string]: unknown;
+                            };
+                        };
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            404: components["responses"]["Problem404"];
+            409: components["responses"]["Problem409"];
+            413: components["responses"]["Problem413"];
+            415: components["responses"]["Problem415"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    Share: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody: {
+            content: {
+                "application/json": Record<string, never>;
+            };
+        };
+        responses: {
+            /** @description Let whoever has the link read this; asking again gives the same link */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        thing: {
+                            /** Format: uuid */
+                            id: string;
+                            /**
+                             * Kind
+                             * @enum {string}
+                             */
+                            kind: "recipe" | "evening";
+                            name: string;
+                            version: number;
+                            /** Format: date-time */
+                            createdAt: string;
+                            /** Format: date-time */
+                            updatedAt: string;
+                            /** @description where whoever has it may read the thing; null: not shared */
+                            link: string | null;
+                            body: {
+                                [key: string]: unknown;
+                            };
+                        };
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            404: components["responses"]["Problem404"];
+            413: components["responses"]["Problem413"];
+            415: components["responses"]["Problem415"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    Unshare: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                id: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description Make the link worthless; a later one is another */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        thing: {
+                            /** Format: uuid */
+                            id: string;
+                            /**
+                             * Kind
+                             * @enum {string}
+                             */
+                            kind: "recipe" | "evening";
+                            name: string;
+                            version: number;
+                            /** Format: date-time */
+                            createdAt: string;
+                            /** Format: date-time */
+                            updatedAt: string;
+                            /** @description where whoever has it may read the thing; null: not shared */
+                            link: string | null;
+                            body: {
+                                [key: string]: unknown;
+                            };
+                        };
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            401: components["responses"]["Problem401"];
+            403: components["responses"]["Problem403"];
+            404: components["responses"]["Problem404"];
+            413: components["responses"]["Problem413"];
+            415: components["responses"]["Problem415"];
+            422: components["responses"]["Problem422"];
+            429: components["responses"]["Problem429"];
+            500: components["responses"]["Problem500"];
+            503: components["responses"]["Problem503"];
+        };
+    };
+    ReadShared: {
+        parameters: {
+            query?: never;
+            header?: never;
+            path: {
+                token: string;
+            };
+            cookie?: never;
+        };
+        requestBody?: never;
+        responses: {
+            /** @description What stands behind a link, without whose it is */
+            200: {
+                headers: {
+                    "X-Request-Id": components["headers"]["X-Request-Id"];
+                    [name: string]: unknown;
+                };
+                content: {
+                    "application/json": {
+                        /**
+                         * Kind
+                         * @enum {string}
+                         */
+                        kind: "recipe" | "evening";
+                        name: string;
+                        /** Format: date-time */
+                        updatedAt: string;
+                        body: {
+                            [key: string]: unknown;
+                        };
+                    };
+                };
+            };
+            400: components["responses"]["Problem400"];
+            404: components["responses"]["Problem404"];
             422: components["responses"]["Problem422"];
             429: components["responses"]["Problem429"];
             500: components["responses"]["Problem500"];

@@ -4,6 +4,7 @@ import { usage } from './0003-usage';
 import { consoleTables } from './0004-console';
 import { refunds } from './0007-refunds';
 import { quotaAlerts } from './0010-quota-alerts';
+import { kitAndSaved } from './0011-kit-and-saved';
 import type { Migration } from './migration';
 
 /** All steps of the schema, in order. */
@@ -14,4 +15,5 @@ export const migrations: readonly Migration[] = [
   consoleTables,
   refunds,
   quotaAlerts,
+  kitAndSaved,
 ];

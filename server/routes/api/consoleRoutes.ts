@@ -2,9 +2,20 @@ import { changeEmailRoute, changePasswordRoute, closeAccountRoute, confirmEmailR
 import { exportRoute } from './exportData';
 import { claimKeyRoute, passRoute, revokeKeyRoute, rotateKeyRoute } from './keyLife';
 import { changeKeyRoute, keyRoute, keysRoute, makeKeyRoute } from './keys';
+import { keepKitRoute, kitRoute } from './kit';
 import { changeMeRoute, eventsRoute, meRoute, rolesRoute } from './me';
 import { askForPasswordRoute, setPasswordRoute } from './passwordReset';
 import type { Route } from './route';
+import {
+  changeSavedRoute,
+  dropSavedRoute,
+  savedListRoute,
+  savedRoute,
+  saveRoute,
+  sharedRoute,
+  shareRoute,
+  unshareRoute,
+} from './saved';
 import { askForPlanRoute, planRoute, withdrawPlanRequestRoute } from './plan';
 import { refreshRoute, sessionStateRoute, signInRoute, signOutRoute } from './session';
 import { endOtherSessionsRoute, endSessionRoute, sessionsRoute } from './sessions';
@@ -46,4 +57,14 @@ export const consoleRoutes: readonly Route[] = [
   planRoute,
   askForPlanRoute,
   withdrawPlanRequestRoute,
+  kitRoute,
+  keepKitRoute,
+  savedListRoute,
+  saveRoute,
+  savedRoute,
+  changeSavedRoute,
+  dropSavedRoute,
+  shareRoute,
+  unshareRoute,
+  sharedRoute,
 ];

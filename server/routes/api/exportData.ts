@@ -9,10 +9,13 @@ import { planRequestsOf } from '../../services/accounts/planRequests';
 import { accountStanding } from '../../services/accounts/standing';
 import { usageMonths } from '../../services/accounts/usageMonths';
 import { ownKeys } from '../../services/keys/ownKeys';
+import { kitOf } from '../../services/saved/kits';
+import { savedWhole } from '../../services/saved/savedThings';
 import { sessionsOf } from '../../services/sessions/sessionsOf';
 import { shown } from './keys';
 import { presentRequest, requestSchema } from './plan';
 import { closedRoute, type Route } from './route';
+import { presentThing, thingSchema } from './saved';
 
 export const exportRoute: Route = closedRoute({
   id: 'ExportData',
@@ -29,17 +32,21 @@ export const exportRoute: Route = closedRoute({
     standing: standingSchema,
     usage: z.array(z.strictObject({ month: z.string(), units: z.int() })),
     keys: z.array(keySchema),
+    kit: z.record(z.string(), z.unknown()),
+    saved: z.array(thingSchema),
     planRequests: z.array(requestSchema),
     sessions: z.array(sessionSchema),
     events: z.array(eventSchema),
   }),
   headers: ['Content-Disposition'],
-  async handle(_given, visit, { database }) {
+  async handle(_given, visit, services) {
+    const { database } = services;
     const { signedIn, origin } = visit;
     const { account, sessionId } = signedIn;
     await audit(database, origin, { event: 'data_exported', accountId: account.id });
     const standing = await accountStanding(database, account.id);
     const keys = await ownKeys(database, account.id);
+    const saved = await savedWhole(database, account.id);
     const planRequests = await planRequestsOf(database, account.id);
     const sessions = await sessionsOf(database, account.id);
     const events = await allEventsOf(database, account.id);
@@ -50,6 +57,8 @@ export const exportRoute: Route = closedRoute({
       standing: presentStanding(standing),
       usage: await usageMonths(database, account.id),
       keys: keys.map(shown),
+      kit: (await kitOf(database, account.id)).kit,
+      saved: saved.map((thing) => presentThing(thing, services)),
       planRequests: planRequests.map(presentRequest),
       sessions: sessions.map((session) => presentSession(session, sessionId)),
       events: events.map(presentEvent),

@@ -21,7 +21,7 @@ interface Described {
   readonly method: ConsoleMethod;
   /** With `:name` for what `params` holds. */
   readonly path: string;
-  readonly tag: 'account' | 'session' | 'keys' | 'usage' | 'plan';
+  readonly tag: 'account' | 'session' | 'keys' | 'usage' | 'plan' | 'saved';
   readonly summary: string;
   readonly limit: Limit;
   readonly status: 200 | 201 | 202 | 204;

@@ -4,7 +4,14 @@ import { endSessions } from '../sessions/endSessions';
 import type { SignedIn } from '../sessions/liveSession';
 
 /** Tables whose rows of an account are its holder's own, by `account_id`; they go with the account. */
-const PERSONAL_TABLES = ['sessions', 'email_tokens', 'plan_requests', 'quota_alerts'] as const;
+const PERSONAL_TABLES = [
+  'sessions',
+  'email_tokens',
+  'plan_requests',
+  'quota_alerts',
+  'kits',
+  'saved_things',
+] as const;
 
 /**
  * Closes an account for good: its keys are revoked, what is personal is removed, and what the service has to keep

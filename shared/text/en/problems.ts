@@ -115,6 +115,18 @@ export const problems = {
     cause: 'A key was made under the same Idempotency-Key; a key is shown once, so it can’t be shown again.',
     cure: 'Use the key that was shown then. If it is lost, revoke it and make another under a new Idempotency-Key.',
   },
+  changed_meanwhile: {
+    status: 409,
+    title: 'It was changed meanwhile',
+    cause: 'Another page or device changed this since it was read, and neither change is to be lost.',
+    cure: 'Read it again, and make the change on what stands there now.',
+  },
+  too_much_saved: {
+    status: 409,
+    title: 'There is too much saved',
+    cause: 'The account keeps as many recipes and evenings as it may.',
+    cure: 'Remove those that nobody needs any more.',
+  },
   request_waiting: {
     status: 409,
     title: 'A wish is waiting already',

@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { fillRecipes } from '../../../shared/calculators/fill/recipes';
 import { consoleRoutes } from '../../../server/routes/api/consoleRoutes';
 import { startConsole, type Answer, type ConsoleService, type Person } from '../../support/consoleService';
 
@@ -20,6 +21,12 @@ beforeAll(async () => {
   });
   owned['/api/plan/requests'] =
     (asked.body as unknown as { requests: { id: string }[] }).requests[0]?.id ?? '';
+  const saved = await owner.browser.call('POST', '/api/saved', {
+    kind: 'recipe',
+    name: 'Mine',
+    body: fillRecipes.examples[0]?.input,
+  });
+  owned['/api/saved'] = (saved.body as unknown as { thing: { id: string } }).thing.id;
   const { sessions } = (await owner.browser.call('GET', '/api/sessions')).body as unknown as {
     sessions: { id: string }[];
   };
@@ -28,11 +35,15 @@ beforeAll(async () => {
 afterAll(() => service.stop());
 
 /** What each route needs to be asked for something. */
-const BODIES: Record<string, object> = { ChangeKey: { name: 'Yours now' }, RotateKey: { grace: 'hour' } };
+const BODIES: Record<string, object> = {
+  ChangeKey: { name: 'Yours now' },
+  RotateKey: { grace: 'hour' },
+  ChangeSaved: { name: 'Yours now', version: 1 },
+};
 
-/** An answer without what differs from request to request. */
+/** An answer without what differs from request to request: its id, and with it its length, and the time. */
 const bare = ({ status, headers, body }: Answer) => {
-  const { 'x-request-id': _id, date: _date, ...rest } = headers;
+  const { 'x-request-id': _id, date: _date, 'content-length': _length, ...rest } = headers;
   const { instance: _instance, ...told } = (body ?? {}) as Record<string, unknown>;
   return { status, headers: rest, body: told };
 };
@@ -41,7 +52,7 @@ const named = consoleRoutes.filter(({ path }) => path.includes(':id'));
 
 describe('what belongs to another account', () => {
   it('covers every route that names something', () => {
-    expect(named.length).toBe(9);
+    expect(named.length).toBe(14);
     for (const { path } of named) expect(owned[path.split('/:id')[0] ?? '']).toBeTruthy();
   });
 
@@ -66,7 +77,7 @@ describe('what belongs to another account', () => {
 
   it('shows in no list and in no export', async () => {
     const lists = ['/api/keys', '/api/sessions', '/api/me', '/api/me/events', '/api/me/export'];
-    for (const path of [...lists, '/api/usage', '/api/plan']) {
+    for (const path of [...lists, '/api/usage', '/api/plan', '/api/kit', '/api/saved']) {
       const { text, status } = await stranger.browser.call('GET', path);
       expect(status).toBe(200);
       for (const secret of [...Object.values(owned), owner.email, owner.id])
