@@ -8,7 +8,6 @@ export type Account = operations['SignIn']['responses'][200]['content']['applica
 export type ApiKey = operations['ReadKey']['responses'][200]['content']['application/json']['key'];
 export type Session =
   operations['ListSessions']['responses'][200]['content']['application/json']['sessions'][number];
-export type Standing = operations['Me']['responses'][200]['content']['application/json'];
 
 const LOCK = 'evenfall.session';
 const listeners = new Set<() => void>();

@@ -1,6 +1,6 @@
 import { consoleApi, taken } from '../api/consoleApi';
 
-export type { Account, ApiKey, Session } from '../api/consoleApi';
+export type { ApiKey, Session } from '../api/consoleApi';
 
 type ChosenRole = 'developer' | 'photographer' | 'educator';
 
