@@ -1,9 +1,9 @@
-import { computed, type ComputedRef } from 'vue';
+import { storeToRefs } from 'pinia';
+import type { ComputedRef } from 'vue';
+import { useLengthStore } from '../stores/useLengthStore';
 import type { LengthUnit } from '../text/lengthUnit';
-import { useSessionStore } from '../stores/useSessionStore';
 
-/** How the reader measures: as their account says, else in metres. */
+/** How the reader measures: as chosen here, else as their account says, else in metres. */
 export function useLengthUnit(): ComputedRef<LengthUnit> {
-  const session = useSessionStore();
-  return computed(() => session.account?.lengthUnit ?? 'metres');
+  return storeToRefs(useLengthStore()).lengthUnit;
 }

@@ -25,6 +25,7 @@ const onScale = (load: () => Promise<PicturesOf>, more?: Partial<Omit<Drawing, '
   }, more);
 
 const exposure = drawn(() => import('./ExposureDrawing.vue'));
+const fill = drawn(() => import('./FillDrawing.vue'));
 
 // prettier-ignore
 const drawings: Readonly<Record<string, Drawing>> = {
@@ -49,6 +50,8 @@ const drawings: Readonly<Record<string, Drawing>> = {
   'flash/motion': drawn(() => import('./MotionDrawing.vue'), { start: 1 }),
   'flash/daylight': onScale(async () => (await import('./geometry/flashPictures')).daylightPictures),
   'flash/budget': drawn(() => import('./BudgetDrawing.vue')),
+  'fill/recipes': fill,
+  'fill/check': fill,
 };
 
 /** The drawing of a calculator, if it has one. */

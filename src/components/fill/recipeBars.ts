@@ -27,7 +27,7 @@ const FLOOR = -1000;
 
 /** Background, ambient light on the subject, flash on it, and their sum with what the flash adds on top. */
 export function recipeBars(
-  { outcome }: FillRecipeOut,
+  { outcome }: Pick<FillRecipeOut, 'outcome'>,
   aim: { readonly backgroundStops: number; readonly subjectStops: number },
 ): RecipeBar[] {
   const { backgroundStops, subjectAmbientStops, subjectFlashStops, subjectStops } = outcome;

@@ -4,12 +4,11 @@ import { naturalLight } from '../../../../shared/math/ladder/naturalLight';
 import { skyLight } from '../../../../shared/math/skyLight';
 import { sunPosition } from '../../../../shared/math/sunPosition';
 import type { Place } from '../../../../shared/math/sunSite';
-import type { LadderAnswer, Rung } from '../../../form/eveningAnswers';
-import type { PlotPoint, PlotTick, Range } from './plotFrame';
-import { pointsOf } from './plotFrame';
+import type { LadderAnswer, Rung } from '../../../text/eveningAnswers';
+import { pointsOf, type PlotPoint, type PlotTick, type Range } from './plotFrame';
 
-const HOUR_MS = 3_600_000;
 const MINUTE_MS = 60_000;
+const TICK_MINUTES = [5, 10, 15, 30, 60, 120, 180];
 /** By incident light, as the ladder counts it. */
 const INCIDENT_C = 250;
 
@@ -40,8 +39,7 @@ export function sceneCurve(
   const light = naturalLight(place, ...across);
   const areLit = (ms: number) => !lamps || (ms >= lamps.onMs && ms < (lamps.offMs ?? Infinity));
   return pointsOf(
-    (ms) =>
-      combinedEv100(light.ev100At(ms), model.skyOffsetStops, areLit(ms) ? model.lampFloorEv100 : null),
+    (ms) => combinedEv100(light.ev100At(ms), model.skyOffsetStops, areLit(ms) ? model.lampFloorEv100 : null),
     across,
     240,
   );
@@ -81,18 +79,17 @@ export function stopsRange(values: readonly number[]): Range {
   return [Math.floor(Math.min(...values) - 0.4), Math.ceil(Math.max(...values) + 0.4)];
 }
 
-/** Round clock times along a span, as the place's clock shows them. */
+/** Round clock times along a span, as the place's clock shows them; a reading that comes twice stands once. */
 export function clockTicks([fromMs, toMs]: Range, read: (ms: number) => string): PlotTick[] {
-  const steps = [5, 10, 15, 30, 60, 120, 180].map((minutes) => minutes * MINUTE_MS);
-  const step = steps.find((size) => (toMs - fromMs) / size <= 9) ?? 3 * HOUR_MS;
-  const ticks: PlotTick[] = [];
-  // Offsets of zones are whole quarters of an hour; the clock's own round times are found from minutes past midnight.
-  for (let ms = Math.ceil(fromMs / (15 * MINUTE_MS)) * 15 * MINUTE_MS; ms <= toMs; ms += minuteStep(step)) {
+  const minutes = TICK_MINUTES.find((size) => (toMs - fromMs) / MINUTE_MS / size <= 9) ?? 180;
+  // Zones are whole quarters of an hour from UTC, so every round reading lies on such a grid.
+  const everyMs = (minutes < 15 ? 5 : 15) * MINUTE_MS;
+  const ticks = new Map<string, PlotTick>();
+  for (let ms = Math.ceil(fromMs / everyMs) * everyMs; ms <= toMs; ms += everyMs) {
     const label = read(ms);
     const [hour = 0, minute = 0] = label.split(':').map(Number);
-    if ((hour * 60 + minute) % (step / MINUTE_MS) === 0) ticks.push({ value: ms, label });
+    const isRound = (hour * 60 + minute) % minutes === 0;
+    if (isRound && !ticks.has(label)) ticks.set(label, { value: ms, label });
   }
-  return ticks;
+  return [...ticks.values()];
 }
-
-const minuteStep = (stepMs: number) => Math.min(stepMs, 15 * MINUTE_MS) % (15 * MINUTE_MS) || 15 * MINUTE_MS;

@@ -80,14 +80,14 @@ function lampPatches({ widthPx, heightPx }: Size): Patch[] {
 const NOTHING = { subject: [], trailPx: 0, lamps: [], ground: 0, shakePx: 0 };
 
 /** What the flash draws: the subject alone, at once, as the shutter opens. */
-export function flashScene(view: LanternView, size: Size): SweptScene {
+function flashScene(view: LanternView, size: Size): SweptScene {
   if (!view.flash) return NOTHING;
   const subject = lanternPatches(view.detailPx, view.flash.stops, size);
   return { ...NOTHING, subject, trailPx: view.flash.blurPx };
 }
 
 /** What the ambient light draws: the subject as it moves on, the ground and its lamps, all of it shaken. */
-export function ambientScene(view: LanternView, size: Size): SweptScene {
+function ambientScene(view: LanternView, size: Size): SweptScene {
   if (!view.ambient) return NOTHING;
   return {
     subject: lanternPatches(view.detailPx, view.ambient.stops, size),
