@@ -5,7 +5,9 @@ import { refusedBy, refusedByNetwork } from './Refused';
 
 export type ConsoleApi = Client<paths>;
 export type Account = operations['SignIn']['responses'][200]['content']['application/json']['account'];
+export type KitBody = operations['KeepKit']['requestBody']['content']['application/json']['kit'];
 export type ApiKey = operations['ReadKey']['responses'][200]['content']['application/json']['key'];
+export type SavedThing = operations['Save']['responses'][201]['content']['application/json']['thing'];
 export type Session =
   operations['ListSessions']['responses'][200]['content']['application/json']['sessions'][number];
 
