@@ -12,6 +12,8 @@ export interface NavigationLine {
 const LINES: readonly NavigationLine[] = [
   { title: 'Calculators', to: '/calculators' },
   { title: 'Fill', to: '/fill' },
+  { title: 'Kit', to: '/kit', roles: ['photographer'] },
+  { title: 'Saved', to: '/recipes', roles: ['photographer'] },
   { title: 'Try it', to: '/try', roles: ['developer'] },
   { title: 'Keys', to: '/keys', roles: ['developer'] },
   { title: 'Usage', to: '/usage', roles: ['developer'] },

@@ -99,6 +99,32 @@ export const routes: readonly RouteRecordRaw[] = [
     meta: { title: 'Key', isOwn: true },
   },
   {
+    path: '/kit',
+    name: 'kit',
+    component: () => import('../views/KitView.vue'),
+    meta: { title: 'Kit', description: 'Your cameras, lenses and flashes, as limits of what is worked out.' },
+  },
+  {
+    path: '/recipes',
+    name: 'recipes',
+    component: () => import('../views/RecipesView.vue'),
+    meta: { title: 'Recipes and evenings', isOwn: true },
+  },
+  {
+    path: '/recipes/:id',
+    name: 'recipe',
+    component: () => import('../views/RecipeView.vue'),
+    props: true,
+    meta: { title: 'Saved', isOwn: true },
+  },
+  {
+    path: '/shared/:token',
+    name: 'shared',
+    component: () => import('../views/SharedView.vue'),
+    props: true,
+    meta: { title: 'Shared with you' },
+  },
+  {
     path: '/usage',
     name: 'usage',
     component: () => import('../views/UsageView.vue'),
