@@ -66,7 +66,7 @@ export const ladderOut = z.strictObject({
     .meta({ title: 'Model of the scene' }),
 });
 
-type LadderOut = z.output<typeof ladderOut>;
+export type LadderOut = z.output<typeof ladderOut>;
 
 function rungOf(rung: Rung, scale: Scale, say: (ms: number) => string): LadderOut['rungs'][number] {
   const { aperture, shutterS, iso, power, sceneEv100, sunAltitudeDeg, errorStops } = rung;

@@ -11,6 +11,7 @@ export interface NavigationLine {
 
 const LINES: readonly NavigationLine[] = [
   { title: 'Calculators', to: '/calculators' },
+  { title: 'Evening', to: '/evening' },
   { title: 'Fill', to: '/fill' },
   { title: 'Kit', to: '/kit', roles: ['photographer'] },
   { title: 'Saved', to: '/recipes', roles: ['photographer'] },

@@ -50,6 +50,15 @@ export const routes: readonly RouteRecordRaw[] = [
     },
   },
   {
+    path: '/evening',
+    name: 'evening',
+    component: () => import('../views/EveningView.vue'),
+    meta: {
+      title: 'Evening',
+      description: 'The light of an evening, and the settings that follow it down from a test frame on.',
+    },
+  },
+  {
     path: '/sign-in',
     name: 'signIn',
     component: () => import('../views/SignInView.vue'),

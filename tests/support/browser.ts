@@ -28,7 +28,12 @@ export interface VisitOptions {
   readonly systemPrefers?: 'light' | 'dark';
   /** Statuses of refusals that the visit provokes; any other is a complaint. */
   readonly refusals?: readonly number[];
+  /** Lets the service worker be installed; other visits need not fetch the whole console each time. */
+  readonly isKept?: boolean;
 }
+
+/** What Playwright itself writes where service workers are blocked. */
+const BLOCKED = 'Service Worker registration blocked by Playwright';
 
 /** What Chromium writes to the console for each answer of 400 and above. */
 const REFUSED = /^Failed to load resource: the server responded with a status of (\d+)/;
@@ -50,7 +55,14 @@ export function openBrowser(): Promise<Browser> {
 /** Opens a context and a page that notes its complaints from the first byte on. */
 export async function visit(
   browser: Browser,
-  { baseUrl, widthPx = 1440, appearance, systemPrefers = 'light', refusals = [] }: VisitOptions,
+  {
+    baseUrl,
+    widthPx = 1440,
+    appearance,
+    systemPrefers = 'light',
+    refusals = [],
+    isKept = false,
+  }: VisitOptions,
 ): Promise<Visit> {
   const context = await browser.newContext({
     baseURL: baseUrl,
@@ -58,6 +70,7 @@ export async function visit(
     colorScheme: systemPrefers,
     locale: 'en-US',
     hasTouch: widthPx < 500,
+    serviceWorkers: isKept ? 'allow' : 'block',
   });
   const complaints: string[] = [];
   await context.exposeFunction('noteViolation', (text: string) => complaints.push(`policy: ${text}`));
@@ -79,6 +92,7 @@ export async function visit(
   page.setDefaultTimeout(5_000);
   page.on('console', (message) => {
     if (message.type() !== 'error' && message.type() !== 'warning') return;
+    if (message.text() === BLOCKED) return;
     if (refusals.includes(Number(REFUSED.exec(message.text())?.[1]))) return;
     complaints.push(`console: ${message.text()}`);
   });

@@ -141,6 +141,8 @@ export const twilightDayOut = z.strictObject({
   dayLengthS: z.number().meta({ title: 'Day length', unit: 's', description: 'from sunrise to sunset' }),
 });
 
+export type TwilightDayOut = z.output<typeof twilightDayOut>;
+
 export const twilightDay = defineCalculator({
   id: 'twilight/day',
   title: 'Light of a day',
