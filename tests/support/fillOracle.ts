@@ -53,7 +53,7 @@ export function syncOf({ camera }: FillWish, shutterS: number): SyncKind {
 }
 
 /** Every way to set a flash, off first, each with its light on the subject in factors of a middle tone. */
-export function everyPower(
+function everyPower(
   wish: FillWish,
   flash: FillFlash,
   settings: ExactSettings,

@@ -2,8 +2,8 @@ import type { BenchContext } from '../BenchContext';
 import { requestText } from '../load/requestText';
 import type { LoadTask } from '../load/loadTask';
 
-export const PATH = '/v1/exposure/value';
-export const INPUT = { aperture: 5.6, shutter: '1/125', iso: 400 };
+const PATH = '/v1/exposure/value';
+const INPUT = { aperture: 5.6, shutter: '1/125', iso: 400 };
 const QUERY = new URLSearchParams(Object.entries(INPUT).map(([name, value]) => [name, String(value)]));
 
 /** Who is asked, and what. */
