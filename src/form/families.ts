@@ -114,3 +114,15 @@ export function partsOf<F extends { readonly name: string }>(
     return members[0] === field ? [{ family, fields: members }] : [];
   });
 }
+
+/** The fields that are folded away: the advanced ones, but none whose family has one that is not. */
+export function foldedFields<F extends { readonly name: string; readonly advanced?: boolean }>(
+  fields: readonly F[],
+  families: readonly Family[],
+): F[] {
+  return fields.filter(({ name, advanced }) => {
+    const family = families.find(({ names }) => names.includes(name));
+    const ownFamily = fields.filter((other) => family?.names.includes(other.name));
+    return advanced && ownFamily.every((other) => other.advanced);
+  });
+}

@@ -24,6 +24,7 @@ const onScale = (load: () => Promise<PicturesOf>, more?: Partial<Omit<Drawing, '
     return () => h(ScaleDrawing, { picturesOf });
   }, more);
 
+const light = drawn(() => import('./LightDrawing.vue'));
 const exposure = drawn(() => import('./ExposureDrawing.vue'));
 const fill = drawn(() => import('./FillDrawing.vue'));
 
@@ -36,7 +37,7 @@ const drawings: Readonly<Record<string, Drawing>> = {
   'exposure/long': onScale(async () => (await import('./geometry/longPictures')).longPictures),
   'exposure/handheld': onScale(async () => (await import('./geometry/handheldPictures')).handheldPictures, { start: 2 }),
   'exposure/depth': drawn(() => import('./DepthDrawing.vue')),
-  'light/convert': drawn(() => import('./LightDrawing.vue')),
+  'light/convert': light,
   'light/scenes': onScale(async () => (await import('./geometry/lightPictures')).scenePictures),
   'light/add': onScale(async () => (await import('./geometry/lightPictures')).addPictures),
   'light/ratio': onScale(async () => (await import('./geometry/lightPictures')).ratioPictures),
@@ -50,6 +51,9 @@ const drawings: Readonly<Record<string, Drawing>> = {
   'flash/motion': drawn(() => import('./MotionDrawing.vue'), { start: 1 }),
   'flash/daylight': onScale(async () => (await import('./geometry/flashPictures')).daylightPictures),
   'flash/budget': drawn(() => import('./BudgetDrawing.vue')),
+  'twilight/day': drawn(() => import('./TwilightDayDrawing.vue')),
+  'twilight/at': light,
+  'twilight/ladder': drawn(() => import('./TwilightLadderDrawing.vue')),
   'fill/recipes': fill,
   'fill/check': fill,
 };
