@@ -163,7 +163,7 @@ export function firstAtLeast(rising: Float64Array, value: number): number {
 }
 
 /** The last place in a rising list that holds at most so much; −1 where none does. */
-export function lastAtMost(rising: Float64Array, value: number): number {
+function lastAtMost(rising: Float64Array, value: number): number {
   let [first, last] = [0, rising.length];
   while (first < last) {
     const middle = (first + last) >> 1;
@@ -174,7 +174,7 @@ export function lastAtMost(rising: Float64Array, value: number): number {
 }
 
 /** The same, looked for from a place that is likely near it: from one search to the next the value moves little. */
-export function lastAtMostFrom(rising: Float64Array, value: number, place: number | null): number {
+function lastAtMostFrom(rising: Float64Array, value: number, place: number | null): number {
   let last = place ?? lastAtMost(rising, value);
   while (last >= 0 && (rising[last] ?? 0) > value) last--;
   while (last + 1 < rising.length && (rising[last + 1] ?? 0) <= value) last++;

@@ -13,7 +13,7 @@ export interface RecipeView {
 }
 
 /** What is asked of the calculator of motion about a recipe; null where no view is known. */
-export function frameQuestion(input: FillRecipesIn, recipe: FillRecipeOut): Record<string, unknown> | null {
+function frameQuestion(input: FillRecipesIn, recipe: FillRecipeOut): Record<string, unknown> | null {
   const { view } = fillWish(input).motion;
   if (view === null) return null;
   const { settings, sync, outcome } = recipe;
