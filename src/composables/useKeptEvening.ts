@@ -33,7 +33,15 @@ export function firstBody(query: LocationQuery, fields: readonly Field[]): Body 
   const last = keptEvening();
   const isOwn = Object.keys(query).length === 0 || last?.address === location.search;
   if (last && isOwn && last.query !== '') return decodeQuery([...new URLSearchParams(last.query)], fields);
-  return bodyOfQuery(query, fields);
+  const body = bodyOfQuery(query, fields);
+  if (!body || body.latitude !== undefined || !last) return body;
+  // A recipe says nothing of the place: it goes on where the last evening was.
+  const { latitude, longitude, timeZone, horizonDeg, skyline } = decodeQuery(
+    [...new URLSearchParams(last.query)],
+    fields,
+  );
+  const there = Object.entries({ latitude, longitude, timeZone, horizonDeg, skyline });
+  return { ...Object.fromEntries(there.filter(([, value]) => value !== undefined)), ...body };
 }
 
 /** Keeps every change at once, for the next visit and for a reload. */
