@@ -174,7 +174,7 @@ function lastAtMost(rising: Float64Array, value: number): number {
 }
 
 /** The same, looked for from a place that is likely near it: from one search to the next the value moves little. */
-function lastAtMostFrom(rising: Float64Array, value: number, place: number | null): number {
+export function lastAtMostFrom(rising: Float64Array, value: number, place: number | null): number {
   let last = place ?? lastAtMost(rising, value);
   while (last >= 0 && (rising[last] ?? 0) > value) last--;
   while (last + 1 < rising.length && (rising[last + 1] ?? 0) <= value) last++;
