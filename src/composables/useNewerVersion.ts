@@ -38,7 +38,8 @@ export function useNewerVersion(): { readonly isReady: Ref<boolean>; readonly ta
   }
 
   onMounted(() => {
-    if (!import.meta.env.PROD || !('serviceWorker' in navigator)) return;
+    // Only built clients have the worker; those that tests build are no PROD by their environment.
+    if (import.meta.env.MODE !== 'production' || !('serviceWorker' in navigator)) return;
     // After everything that the page itself needs; that it can't be kept is no trouble.
     const begin = () => void register().catch(() => undefined);
     if (document.readyState === 'complete') begin();
