@@ -24,7 +24,13 @@ export function guardSession(router: Router): void {
       void session.look();
       return true;
     }
-    const account = await session.require().catch(() => null);
+    let account;
+    try {
+      account = await session.require();
+    } catch {
+      // Without an answer a screen may still show what this browser keeps.
+      if (to.meta.isKeptHere) return true;
+    }
     return account ? roleAllows(to, account.roles) : toSignIn(to.fullPath);
   });
   router.isReady().then(

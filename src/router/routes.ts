@@ -8,6 +8,8 @@ declare module 'vue-router' {
     description?: string;
     /** Whether it belongs to an account, so that one signs in first. */
     isOwn?: boolean;
+    /** Whether it can be read from what this browser keeps, where the service gives no answer. */
+    isKeptHere?: boolean;
     /** Roles of which one is needed; whoever is signed in where nothing is said. */
     roles?: readonly Role[];
   }
@@ -117,14 +119,14 @@ export const routes: readonly RouteRecordRaw[] = [
     path: '/recipes',
     name: 'recipes',
     component: () => import('../views/RecipesView.vue'),
-    meta: { title: 'Recipes and evenings', isOwn: true },
+    meta: { title: 'Recipes and evenings', isOwn: true, isKeptHere: true },
   },
   {
     path: '/recipes/:id',
     name: 'recipe',
     component: () => import('../views/RecipeView.vue'),
     props: true,
-    meta: { title: 'Saved', isOwn: true },
+    meta: { title: 'Saved', isOwn: true, isKeptHere: true },
   },
   {
     path: '/shared/:token',

@@ -16,7 +16,8 @@ function seen(): string | null {
 
 function remember(id: string | undefined): void {
   try {
-    if (id === undefined) localStorage.removeItem(SEEN_AS);
+    // What was somebody's own goes with them.
+    if (id === undefined) for (const name of [SEEN_AS, 'evenfall.saved']) localStorage.removeItem(name);
     else localStorage.setItem(SEEN_AS, id);
   } catch {
     // Storage may be closed to this page; then every page asks.

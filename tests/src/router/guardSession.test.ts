@@ -28,6 +28,7 @@ beforeEach(() => {
       { path: '/sign-in', component },
       { path: '/settings', component, meta: { isOwn: true } },
       { path: '/usage', component, meta: { isOwn: true, roles: ['developer'] } },
+      { path: '/recipes', component, meta: { isOwn: true, isKeptHere: true } },
       { path: '/admin/keys', component, meta: { isOwn: true, roles: ['admin'] } },
       { path: '/:rest(.*)*', name: 'notFound', component },
     ],
@@ -55,6 +56,12 @@ describe('the guard', () => {
   it('asks to sign in where the service gives no answer', async () => {
     vi.mocked(useSessionStore().require).mockRejectedValue(new Error('down'));
     expect(await pathOf('/settings')).toBe('/sign-in?to=/settings');
+  });
+
+  it('shows what this browser keeps where the service gives no answer, and to nobody else', async () => {
+    expect(await pathOf('/recipes')).toBe('/sign-in?to=/recipes');
+    vi.mocked(useSessionStore().require).mockRejectedValue(new Error('down'));
+    expect(await pathOf('/recipes')).toBe('/recipes');
   });
 
   it('leads to the roles where one is missing, and shows nothing of what is for administrators', async () => {
