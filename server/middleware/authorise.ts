@@ -12,11 +12,13 @@ export interface Credentials {
   readonly site: string | null;
   /** A bearer of the try page, which stands for a key. */
   readonly isPass: boolean;
+  /** Why the call is refused whatever the key may do; its key is looked up all the same, so that its log tells. */
+  readonly refusal?: ProblemError;
 }
 
 /**
  * Reads the key of a call; a typing error is found by its checksum.
- * @throws ProblemError 401 without a key or with one that can't be, 403 for a server key in a browser page or a pass elsewhere
+ * @throws ProblemError 401 without a key or with one that can't be, 403 for a pass elsewhere
  */
 export function authorise(request: IncomingMessage, ownOrigin: string): Credentials {
   const header = request.headers.authorization;
@@ -27,9 +29,10 @@ export function authorise(request: IncomingMessage, ownOrigin: string): Credenti
   if (kind === null) throw keyMistyped();
   const origin = request.headers.origin ?? null;
   const site = origin === ownOrigin ? null : origin;
-  if (kind === 'server' && site !== null) throw new ProblemError('server_key_in_browser');
   const isPass = kind === 'pass';
   if (isPass && !isConsolePage(request.headers, ownOrigin)) throw passElsewhere();
   const keyHash = createHash('sha256').update(key).digest();
-  return { keyHash, site: kind === 'page' ? origin : null, isPass };
+  const isInBrowser = kind === 'server' && site !== null;
+  const refusal = isInBrowser ? new ProblemError('server_key_in_browser') : undefined;
+  return { keyHash, site: kind === 'page' ? origin : null, isPass, refusal };
 }

@@ -9,7 +9,8 @@ export const router = createRouter({
   routes: [...routes],
   scrollBehavior(to, from, saved) {
     if (saved) return saved;
-    if (to.hash) return { el: to.hash, top: 16 };
+    // The token of a mailed link stands there too, and is no place on the page.
+    if (to.hash && document.getElementById(to.hash.slice(1))) return { el: to.hash, top: 16 };
     return to.path === from.path ? false : { top: 0 };
   },
 });

@@ -46,7 +46,7 @@ it('a stranger signs up, confirms the mail, makes a key, asks on the try page an
   });
 }, 60_000);
 
-it('a fault is told as the service tells it, costs nothing, and can be found in the key’s log an hour later', async () => {
+it('a fault is told as the service tells it, costs nothing, and can be found in the key’s log', async () => {
   const { email, keyId } = await developer();
   await visiting({ refusals: [422] }, async (page) => {
     await signIn(page, email);

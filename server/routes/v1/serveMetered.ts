@@ -39,6 +39,12 @@ async function prepare(operation: MeteredOperation, call: Call): Promise<Prepare
   }
 }
 
+/** A call that is refused unread; its body must not keep the connection from the next request. */
+function refused({ request }: Call, problem: ProblemError): Prepared {
+  request.resume();
+  return { units: 0, needs: [], problem, answer: () => null };
+}
+
 function matches(call: Call, etag: string | undefined): boolean {
   const given = call.request.headers['if-none-match'];
   if (!etag || !given) return false;
@@ -66,8 +72,8 @@ export async function serveMetered(
   dependencies: MeteredDependencies,
 ): Promise<void> {
   const { meter, publicUrl, finish, onFault } = dependencies;
-  const { keyHash, site, isPass } = credentialsOf(call.request, publicUrl);
-  const ready = await prepare(operation, call);
+  const { keyHash, site, isPass, refusal } = credentialsOf(call.request, publicUrl);
+  const ready = refusal ? refused(call, refusal) : await prepare(operation, call);
   const isUnchanged = !ready.problem && matches(call, ready.etag);
   const units = isUnchanged || ready.problem ? 0 : ready.units;
   const ask: Ask = { keyHash, units, needs: ready.needs, site, isPass };

@@ -1,5 +1,5 @@
 import { randomUUID } from 'node:crypto';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import { hashOfKey, newKey, shownPartsOf } from '../../../server/services/keys/keyText';
 import { startService, type TestService } from '../../support/service';
 
@@ -86,6 +86,23 @@ describe('who may call from where', () => {
     expect(told['access-control-allow-methods']?.split(', ').sort()).toEqual(['GET', 'HEAD', 'POST']);
     expect(told['access-control-allow-headers']).toMatch(/Authorization.*Content-Type/);
     expect(told['access-control-allow-origin']).toBe('*');
+  });
+
+  it('tells in a server key’s log that it was used in a page', async () => {
+    const key = await service.key({ account: 'in-a-page@example.org' });
+    const refused = await service.call('POST', path, { key, body, headers: { Origin: LISTED } });
+    await vi.waitFor(
+      async () => {
+        const [line] = await service.sql<{ calls: { code?: string; request: string }[] }>(
+          `SELECT l.calls FROM request_log l JOIN api_keys k ON k.id = l.key_id JOIN accounts a ON a.id = k.account_id
+           WHERE a.email = 'in-a-page@example.org'`,
+        );
+        expect(line?.calls).toMatchObject([
+          { code: 'server_key_in_browser', request: refused.headers['x-request-id'] },
+        ]);
+      },
+      { timeout: 8_000 },
+    );
   });
 
   it('costs nothing to be refused', async () => {
