@@ -73,7 +73,16 @@ export class FaultCluster {
   }
 
   #signal(name: NodeJS.Signals): void {
-    for (const pid of processesIn(this.#cluster.folder)) process.kill(pid, name);
+    for (const pid of processesIn(this.#cluster.folder)) signalled(pid, name);
+  }
+}
+
+/** A backend may end by itself between being listed and being signalled; then there is nothing left to reach. */
+function signalled(pid: number, name: NodeJS.Signals): void {
+  try {
+    process.kill(pid, name);
+  } catch (error) {
+    if ((error as NodeJS.ErrnoException).code !== 'ESRCH') throw error;
   }
 }
 
