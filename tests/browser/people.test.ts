@@ -118,7 +118,7 @@ describe('sessions', () => {
       await openScreen(second, '/keys');
       await button(page, 'Sign out').click();
       await page.getByRole('link', { name: 'Sign in', exact: true }).waitFor();
-      expect(new URL(page.url()).pathname).toBe('/');
+      await expect.poll(() => new URL(page.url()).pathname).toBe('/');
       await second.getByRole('link', { name: 'Orla Wick' }).or(heading(second, 'Sign in')).first().click();
       await heading(second, 'Sign in').waitFor();
       await page.goto('/keys');
