@@ -58,7 +58,7 @@ export async function serve(options: ServeOptions): Promise<Service> {
   });
   const now = () => new Date();
   const metrics = serviceMetrics(usageConnections, () => performance.now());
-  const log = accessLog(logger);
+  const log = accessLog(logger, now);
   const record = recordFinished(usage, now);
   const calculators = await loadCalculators();
   const onTrouble = (what: string, reason: string) => logger.warn({ reason }, what);

@@ -42,11 +42,8 @@ function collect(request: IncomingMessage, limit: number): Promise<unknown> {
         reject(error as Error);
       }
     });
-    request.on('error', reject);
-    request.on('close', () => {
-      // Every request closes; one that is complete has been told above.
-      if (!request.complete) reject(new ProblemError('malformed_request', 'The body ended too early.'));
-    });
+    // A sender who is gone before the end is told as an error too.
+    request.on('error', () => reject(new ProblemError('malformed_request', 'The body ended too early.')));
   });
 }
 

@@ -63,12 +63,6 @@ function serveOpen(
   send(call, isUnchanged ? 304 : 200, typed, isUnchanged ? '' : operation.body, finish);
 }
 
-async function serve(operation: Operation, call: Call, dependencies: V1Dependencies): Promise<void> {
-  call.facts.operation = operation.name;
-  if (operation.access === 'open') return serveOpen(operation, call, dependencies);
-  return serveMetered(operation, call, dependencies);
-}
-
 /**
  * The metered API as one handler in front of everything else: a look-up by path instead of a walk through the
  * router, then the operation. Requests to other paths go on.
@@ -92,6 +86,8 @@ export function v1Handler(dependencies: V1Dependencies): RequestHandler {
       return send(call, 204, preflightHeaders(Object.keys(methods)), '', finish);
     const operation = methods[request.method];
     if (!operation) return refuse(notAllowed(Object.keys(methods)));
-    serve(operation, call, dependencies).catch(refuse);
+    call.facts.operation = operation.name;
+    if (operation.access === 'open') return serveOpen(operation, call, dependencies);
+    serveMetered(operation, call, dependencies).catch(refuse);
   };
 }

@@ -6,7 +6,13 @@ import { sendJson, send, type Finish, type HeaderList } from '../../http/send';
 import { problemErrorOf, sendProblem } from '../../http/sendProblem';
 import { refusalProblem } from '../../policies/refusals';
 import { limitHeaders } from '../../presenters/limitHeaders';
-import { MeterUnavailable, type Ask, type Decision, type Meter } from '../../services/metering/meter';
+import {
+  MeterUnavailable,
+  type Ask,
+  type Decision,
+  type Meter,
+  type Standing,
+} from '../../services/metering/meter';
 import { corsHeaders } from './cors';
 import { credentialsOf } from './credentialsOf';
 import type { Operation, Prepared } from './operation';
@@ -51,6 +57,14 @@ function matches(call: Call, etag: string | undefined): boolean {
   return given.split(',').some((one) => one.trim() === etag || one.trim() === etag.slice(2));
 }
 
+let told: { readonly standing: Standing; readonly headers: HeaderList } | undefined;
+
+/** Calls that were decided together have one standing, and the same to be told about it. */
+function limitsOf(standing: Standing): HeaderList {
+  if (told?.standing !== standing) told = { standing, headers: limitHeaders(standing) };
+  return told.headers;
+}
+
 async function decide(meter: Meter, ask: Ask): Promise<Decision> {
   try {
     return await meter.take(ask);
@@ -83,7 +97,7 @@ export async function serveMetered(
   call.facts.accountId = standing?.accountId;
   call.facts.at = standing?.at;
   const limits: HeaderList = corsHeaders(call.request);
-  if (standing) limits.push(...limitHeaders(standing));
+  if (standing) limits.push(...limitsOf(standing));
   if (!decision.granted) {
     sendProblem(call, refusalProblem(decision, ask), publicUrl, finish, limits);
     return;

@@ -23,15 +23,28 @@ export interface ServiceMetrics {
   readonly contentType: string;
 }
 
+function count(counted: Map<string, Map<number, number>>, operation: string, status: number): void {
+  let statuses = counted.get(operation);
+  if (!statuses) counted.set(operation, (statuses = new Map<number, number>()));
+  statuses.set(status, (statuses.get(status) ?? 0) + 1);
+}
+
 /** What an operator watches: calls, their time, the process, and whether the books agree. */
 export function serviceMetrics(pool: pg.Pool, clock: () => number): ServiceMetrics {
   const registry = new Registry();
   collectDefaultMetrics({ register: registry });
-  const calls = new Counter({
+  const counted = new Map<string, Map<number, number>>();
+  new Counter({
     name: 'evenfall_calls_total',
     help: 'Finished calls by operation and status',
     labelNames: ['operation', 'status'],
     registers: [registry],
+    // Labels are put together when somebody asks, not at each call.
+    collect() {
+      this.reset();
+      for (const [operation, statuses] of counted)
+        for (const [status, calls] of statuses) this.inc({ operation, status }, calls);
+    },
   });
   const seconds = new Histogram({
     name: 'evenfall_call_seconds',
@@ -63,7 +76,7 @@ export function serviceMetrics(pool: pg.Pool, clock: () => number): ServiceMetri
   });
   return {
     finish: (call, status, ms) => {
-      calls.inc({ operation: call.facts.operation ?? 'other', status });
+      count(counted, call.facts.operation ?? 'other', status);
       seconds.observe(ms / 1000);
       if (call.facts.units > 0) units.inc(call.facts.units);
     },

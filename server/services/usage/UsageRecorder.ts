@@ -1,4 +1,5 @@
 import { LATENCY_BUCKETS, latencyBucket } from '../../../shared/math/latencyHistogram';
+import { LineLog } from './LineLog';
 
 /** One finished call as the counts and the log keep it: never a body, a query or a key. */
 export interface FinishedCall {
@@ -37,35 +38,39 @@ export interface LoggedCall {
 
 export interface Gathered {
   readonly hours: readonly HourCount[];
-  readonly logs: ReadonlyMap<string, readonly LoggedCall[]>;
+  readonly logs: ReadonlyMap<string, LineLog>;
 }
 
-/** A key keeps this many calls in its log. */
-export const LOG_LENGTH = 10_000;
 const HOUR_MS = 3_600_000;
+
+/** The calls of one batch share their moment, so that its text is made once. */
+interface Moment {
+  readonly at: Date;
+  readonly text: string;
+  readonly hourMs: number;
+}
+
+function momentOf(at: Date): Moment {
+  return { at, text: at.toISOString(), hourMs: Math.floor(at.getTime() / HOUR_MS) * HOUR_MS };
+}
 
 /** Gathers finished calls in memory until they are written; a call costs a few additions. */
 export class UsageRecorder {
   private hours = new Map<string, HourCount>();
-  private logs = new Map<string, LoggedCall[]>();
+  private logs = new Map<string, LineLog>();
+  private lastCount: HourCount | undefined;
+  private moment: Moment = momentOf(new Date(0));
 
   record(call: FinishedCall): void {
-    const { keyId, calculator, status, units, ms } = call;
-    const hourMs = Math.floor(call.at.getTime() / HOUR_MS) * HOUR_MS;
-    const statusClass = status === 304 ? 2 : Math.floor(status / 100);
-    const name = `${keyId} ${calculator} ${hourMs} ${statusClass}`;
-    let count = this.hours.get(name);
-    if (!count) {
-      const latency = new Array<number>(LATENCY_BUCKETS).fill(0);
-      count = { keyId, calculator, hourMs, statusClass, calls: 0, units: 0, totalMs: 0, latency };
-      this.hours.set(name, count);
-    }
+    const { status, units, ms, at } = call;
+    if (at !== this.moment.at) this.moment = momentOf(at);
+    const count = this.countOf(call, this.moment.hourMs, status === 304 ? 2 : Math.floor(status / 100));
     count.calls += 1;
     count.units += units;
     count.totalMs += ms;
     const bucket = latencyBucket(ms);
     count.latency[bucket] = (count.latency[bucket] ?? 0) + 1;
-    this.log(call);
+    this.log(call, this.moment.text);
   }
 
   /** Hands over what was gathered and starts anew. */
@@ -73,15 +78,34 @@ export class UsageRecorder {
     const gathered = { hours: [...this.hours.values()], logs: this.logs };
     this.hours = new Map();
     this.logs = new Map();
+    this.lastCount = undefined;
     return gathered;
   }
 
-  private log({ keyId, calculator, at, status, code, units, ms, requestId }: FinishedCall): void {
-    let lines = this.logs.get(keyId);
-    if (!lines) this.logs.set(keyId, (lines = []));
-    const rounded = Math.round(ms * 1000) / 1000;
-    lines.push({ at: at.toISOString(), calculator, status, code, units, ms: rounded, request: requestId });
-    // Older ones would be deleted after writing; let them go in time, a thousand at once.
-    if (lines.length > LOG_LENGTH + 1000) lines.splice(0, lines.length - LOG_LENGTH);
+  /** Most calls are like the one before; only another one pays for a look-up by name. */
+  private countOf({ keyId, calculator }: FinishedCall, hourMs: number, statusClass: number): HourCount {
+    const last = this.lastCount;
+    if (
+      last?.keyId === keyId &&
+      last.calculator === calculator &&
+      last.hourMs === hourMs &&
+      last.statusClass === statusClass
+    )
+      return last;
+    const name = `${keyId} ${calculator} ${hourMs} ${statusClass}`;
+    let count = this.hours.get(name);
+    if (!count) {
+      const latency = new Array<number>(LATENCY_BUCKETS).fill(0);
+      count = { keyId, calculator, hourMs, statusClass, calls: 0, units: 0, totalMs: 0, latency };
+      this.hours.set(name, count);
+    }
+    this.lastCount = count;
+    return count;
+  }
+
+  private log(call: FinishedCall, at: string): void {
+    let log = this.logs.get(call.keyId);
+    if (!log) this.logs.set(call.keyId, (log = new LineLog()));
+    log.add(call, at);
   }
 }

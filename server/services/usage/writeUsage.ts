@@ -1,5 +1,6 @@
 import type pg from 'pg';
-import { LOG_LENGTH, type Gathered, type HourCount } from './UsageRecorder';
+import { LOG_LENGTH } from './LineLog';
+import type { Gathered, HourCount } from './UsageRecorder';
 
 const ADD_HOURS = `
 INSERT INTO usage_hours AS u (key_id, hour, calculator, status_class, calls, units, total_ms, latency)
@@ -12,10 +13,11 @@ ON CONFLICT (key_id, hour, calculator, status_class) DO UPDATE SET
   calls = u.calls + excluded.calls, units = u.units + excluded.units, total_ms = u.total_ms + excluded.total_ms,
   latency = add_each(u.latency, excluded.latency), updated_at = service_now()`;
 
+/** The lines come as one JSON text: in an array of texts each quotation mark would have to be escaped. */
 const ADD_LOG = `
 INSERT INTO request_log (key_id, last_at, calls_held, calls)
 SELECT s.key_id, s.last_at, s.held, s.calls
-FROM unnest($1::uuid[], $2::timestamptz[], $3::int[], $4::jsonb[]) s (key_id, last_at, held, calls)
+FROM json_to_recordset($1::json) s (key_id uuid, last_at timestamptz, held int, calls jsonb)
 WHERE EXISTS (SELECT FROM api_keys k WHERE k.id = s.key_id)`;
 
 /** Rows of a key that lie wholly behind its newest 10,000 calls. */
@@ -45,12 +47,6 @@ function hourParameters(hours: readonly HourCount[]): unknown[] {
 export async function writeUsage(pool: pg.Pool | pg.Client, { hours, logs }: Gathered): Promise<void> {
   if (hours.length > 0) await pool.query(ADD_HOURS, hourParameters(hours));
   if (logs.size === 0) return;
-  const entries = [...logs].map(([keyId, lines]) => ({ keyId, lines: lines.slice(-LOG_LENGTH) }));
-  await pool.query(ADD_LOG, [
-    entries.map(({ keyId }) => keyId),
-    entries.map(({ lines }) => lines[lines.length - 1]?.at),
-    entries.map(({ lines }) => lines.length),
-    entries.map(({ lines }) => JSON.stringify(lines)),
-  ]);
-  await pool.query(SHORTEN, [entries.map(({ keyId }) => keyId)]);
+  await pool.query(ADD_LOG, [`[${[...logs].map(([keyId, log]) => log.text(keyId)).join(',')}]`]);
+  await pool.query(SHORTEN, [[...logs.keys()]]);
 }
