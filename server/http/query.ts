@@ -1,8 +1,12 @@
 import { ProblemError } from './ProblemError';
 
 const KEY_NAMES = new Set(['key', 'apikey', 'api_key', 'access_token', 'token', 'authorization']);
+const ENCODED = /[%+]/;
+/** The start of every key of ours. */
+const KEY_START = /evenfall_(server|page|pass)_/;
 
 function decode(text: string): string {
+  if (!ENCODED.test(text)) return text;
   try {
     return decodeURIComponent(text.replaceAll('+', ' '));
   } catch {
@@ -23,7 +27,7 @@ export function readQuery(search: string): [string, string][] {
     const at = part.indexOf('=');
     const name = decode(at < 0 ? part : part.slice(0, at));
     const value = at < 0 ? '' : decode(part.slice(at + 1));
-    if (KEY_NAMES.has(name.toLowerCase()) || /evenfall_(server|page|pass)_/.test(value)) {
+    if (KEY_NAMES.has(name.toLowerCase()) || KEY_START.test(value)) {
       throw new ProblemError(
         'malformed_request',
         'Addresses end up in logs: send the key in the Authorization header, never in the address.',

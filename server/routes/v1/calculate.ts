@@ -1,4 +1,4 @@
-import { createHash } from 'node:crypto';
+import { hash } from 'node:crypto';
 import { answerFor, parseInput, type AnyCalculator } from '../../../shared/contract/defineCalculator';
 import { decodeQuery, type QueryPairs } from '../../../shared/contract/queryCodec';
 import { invalidInput } from './invalidInput';
@@ -19,8 +19,8 @@ function prepared(calculator: AnyCalculator, body: unknown, now: () => Date): Pr
 
 /** Weak, from the engine's version and the input with its defaults, so known before the calculation. */
 function etagOf(calculator: AnyCalculator, input: unknown, version: string): string {
-  const hash = createHash('sha256').update(calculator.id).update(JSON.stringify(input)).digest('base64url');
-  return `W/"${version}-${hash.slice(0, 22)}"`;
+  const text = hash('sha256', calculator.id + JSON.stringify(input), 'base64url');
+  return `W/"${version}-${text.slice(0, 22)}"`;
 }
 
 /** The operations of one calculator: POST always, GET where its required fields are scalars. */
