@@ -8,7 +8,9 @@ const { visiting } = consoleVisits();
 
 /** A frame of a display that shows sixty a second. */
 const FRAME_MS = 16;
-const CHANGES = 20;
+const CHANGES = 10;
+/** The best of these counts: whatever else the machine does only ever adds to the page's own work. */
+const ROUNDS = 3;
 
 /** Changes the first slider, else the first number, to and fro; each change ends before the next begins. */
 function changeOften(page: Page): Promise<boolean> {
@@ -39,25 +41,27 @@ async function workOfChange(page: Page): Promise<number> {
     return metrics.find(({ name }) => name === 'TaskDuration')?.value ?? Number.NaN;
   };
   expect(await changeOften(page)).toBe(true);
-  const before = await worked();
-  await changeOften(page);
-  return ((await worked()) - before) * (1000 / CHANGES);
+  let least = Infinity;
+  for (let round = 0; round < ROUNDS; round += 1) {
+    const before = await worked();
+    await changeOften(page);
+    least = Math.min(least, ((await worked()) - before) * (1000 / CHANGES));
+  }
+  return least;
 }
 
-/** Answers of hundreds of rows, which the page lays out anew at each change: two frames, not yet one. */
-const LONG_ANSWERS = new Set(['flash/daylight', 'fill/check']);
-/** Searches over thousands of combinations or an evening's minutes; they have a pace of their own. */
-const SEARCHES = new Set(['fill/recipes', 'twilight/day', 'twilight/ladder']);
+/** A search over thousands of combinations; its answer may take two frames. */
+const SEARCHES = new Set(['fill/recipes']);
 
-it.each(calculatorList.map(({ id }) => id).filter((id) => id !== 'light/scenes' && !SEARCHES.has(id)))(
-  '%s answers and draws a change within a frame, or two where the answer is long',
+it.each(calculatorList.map(({ id }) => id).filter((id) => id !== 'light/scenes'))(
+  '%s answers and draws a change within a frame, a search within two',
   async (id) => {
     await visiting({}, async (page) => {
       await openScreen(page, `/calculators/${id}`);
       await page.locator('.answer figure').first().waitFor();
       const workMs = await workOfChange(page);
       expect(workMs).toBeGreaterThan(0);
-      expect(workMs).toBeLessThan(FRAME_MS * (LONG_ANSWERS.has(id) ? 2 : 1));
+      expect(workMs).toBeLessThan(FRAME_MS * (SEARCHES.has(id) ? 2 : 1));
     });
   },
 );
