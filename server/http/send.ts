@@ -34,9 +34,13 @@ function write({ call, status, headers, body, finish }: Outgoing): void {
   // A caller who is gone gets nothing, but the call was counted and has to be in the books.
   if (!response.headersSent && !response.destroyed) {
     const all = ['X-Request-Id', requestId, ...API_HEADERS, ...headers];
-    if (status !== 304 && status !== 204) all.push('Content-Length', String(Buffer.byteLength(body)));
+    const bytes = Buffer.byteLength(body);
+    if (status !== 304 && status !== 204) all.push('Content-Length', String(bytes));
     response.writeHead(status, all);
-    response.end(call.request.method === 'HEAD' ? undefined : body);
+    // Plain ASCII, which most answers are, is the same in both, and Latin-1 is copied where UTF-8 is put together.
+    const encoding = bytes === body.length ? 'latin1' : 'utf8';
+    if (call.request.method === 'HEAD') response.end();
+    else response.end(body, encoding);
   }
   finish(call, status, Math.round((performance.now() - call.startedMs) * 1000) / 1000);
 }
