@@ -114,13 +114,19 @@ export function resultParts(
   return fields.flatMap((field) => partOf(field, valuesOf(result)[field.name], measure));
 }
 
+/** What the question said already, or what only tells how to read the rest. */
+const ECHOED = new Set(['timeZone', 'date', 'at']);
+
 /**
  * What an answer says first: the value that its first one names, else its first one or two single values. Parts of
- * a sum, which are named `by…`, do not stand beside it, nor does what the answer leaves open.
+ * a sum, which are named `by…`, do not stand beside it, nor does what the answer leaves open or says twice.
  */
 export function headlineOf(parts: readonly ResultPart[]): ValuePart[] {
   const values = parts.filter((part) => part.kind === 'value');
   const named = values.find(({ name }) => name === values[0]?.code);
   if (named) return [named];
-  return values.filter(({ name, text }) => text !== '–' && !/^by[A-Z]/.test(name)).slice(0, 2);
+  const [first, second] = values.filter(
+    ({ name, text }) => text !== '–' && !/^by[A-Z]/.test(name) && !ECHOED.has(name),
+  );
+  return [first, second?.text === first?.text ? undefined : second].filter((value) => value !== undefined);
 }

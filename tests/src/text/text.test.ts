@@ -10,7 +10,7 @@ import {
   formatStops,
 } from '../../../src/text/formatQuantity';
 import { headlineOf, resultParts, type ResultPart } from '../../../src/text/resultParts';
-import { residualText } from '../../../src/text/valueText';
+import { residualText, valueText } from '../../../src/text/valueText';
 
 const calculators = await loadCalculators();
 
@@ -122,14 +122,32 @@ describe('an answer', () => {
   });
 });
 
+describe('instants', () => {
+  const field = { name: 'at', title: 'At', kind: 'text', isRequired: true } as const;
+
+  it.each([
+    ['2026-06-21T22:00:00+01:00', '2026-06-21 22:00:00'],
+    ['2026-06-21T21:00:00.000Z', '2026-06-21 21:00:00 UTC'],
+    ['2026-06-21', '2026-06-21'],
+  ])('%s reads %s', (instant, text) => expect(valueText(field as never, instant)).toBe(text));
+});
+
 describe('the headline', () => {
   it('is the solved setting where the answer names one', () => {
     expect(headlineOf(partsOfExample('exposure/solve')).map(({ name }) => name)).toEqual(['shutter']);
   });
 
   it('is the first values else, without the parts of a sum and what is left open', () => {
-    expect(headlineOf(partsOfExample('exposure/value')).map(({ name }) => name)).toEqual(['ev', 'ev100']);
+    expect(headlineOf(partsOfExample('exposure/depth')).map(({ name }) => name)).toEqual(['nearM', 'farM']);
     expect(headlineOf(partsOfExample('exposure/difference')).map(({ name }) => name)).toEqual(['stops']);
     expect(headlineOf(partsOfExample('flash/daylight')).every(({ text }) => text !== '–')).toBe(true);
+  });
+
+  it('says nothing twice, and not what was asked', () => {
+    expect(headlineOf(partsOfExample('exposure/value')).map(({ name }) => name)).toEqual(['ev']);
+    const names = headlineOf(partsOfExample('twilight/at')).map(({ name }) => name);
+    expect(names).toHaveLength(2);
+    expect(names).not.toContain('timeZone');
+    expect(names).not.toContain('at');
   });
 });
