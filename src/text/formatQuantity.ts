@@ -37,9 +37,21 @@ export function formatQuantity(value: number, unit?: string, measure: LengthUnit
   return unit === '°' || unit === '%' ? `${text}${unit === '%' ? ' %' : unit}` : `${text} ${unit}`;
 }
 
-/** Short times in milli- or microseconds, so that nobody counts zeros. */
+const HOUR_S = 3600;
+
+/** Whole seconds as hours, minutes and seconds, as far as there are some. */
+function hoursText(seconds: number): string {
+  const whole = Math.round(seconds);
+  const parts = [Math.floor(whole / HOUR_S), Math.floor((whole % HOUR_S) / 60), whole % 60];
+  return parts
+    .flatMap((part, i) => (part > 0 ? [`${formatNumber(part)} ${'h min s'.split(' ')[i]}`] : []))
+    .join(' ');
+}
+
+/** Times of an hour and more in hours; short ones in milli- or microseconds, so that nobody counts zeros. */
 function formatTime(seconds: number): string {
   const size = Math.abs(seconds);
+  if (size >= HOUR_S) return `${seconds < 0 ? '−' : ''}${hoursText(size)}`;
   if (size === 0 || size >= 0.1) return `${formatNumber(seconds)} s`;
   return size >= 0.001 ? `${formatNumber(seconds * 1e3)} ms` : `${formatNumber(seconds * 1e6)} µs`;
 }

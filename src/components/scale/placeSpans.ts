@@ -4,7 +4,7 @@ import { textWidthPx } from './placeLabels';
 
 const LANE_PX = 24;
 const BAR_PX = 18;
-const LINE_PX = 18;
+const LINE_PX = 20;
 const GAP_PX = 8;
 
 export interface PlacedSpan {
@@ -61,7 +61,7 @@ export function placeSpans(
     const top = tops[lane] ?? 0;
     const topPx = top + (hasLine(lane) ? LINE_PX : 0);
     const beside = words[i] ?? { xPx: 0, anchor: 'start' as const, isAbove: false };
-    const baselinePx = beside.isAbove ? topPx - 5 : topPx + 14;
+    const baselinePx = beside.isAbove ? topPx - 7 : topPx + 14;
     const widthPx = Math.max(2, rightPx - leftPx);
     return { span, leftPx, widthPx, topPx, heightPx: BAR_PX, words: { ...beside, baselinePx } };
   });
