@@ -18,13 +18,13 @@ export interface SavedQuestion {
 const client = () => import('../api/consoleApi');
 
 /** Saves a calculator's question under a name, saves it again when it was changed, and shares it by a link. */
-export function useSavedQuestion(kind: Kind, body: Readonly<Ref<Body>>): SavedQuestion {
+export function useSavedQuestion(kind: Kind, body: () => Body): SavedQuestion {
   const thing = shallowRef<SavedThing | null>(null);
-  const savedBody = shallowRef<Body | null>(null);
+  const savedText = shallowRef('');
 
   async function save(name: string): Promise<void> {
     const { consoleApi, taken } = await client();
-    const [asked, before] = [body.value, thing.value];
+    const [asked, before] = [body(), thing.value];
     const answer = before
       ? await taken(
           consoleApi.PATCH('/api/saved/{id}', {
@@ -34,7 +34,7 @@ export function useSavedQuestion(kind: Kind, body: Readonly<Ref<Body>>): SavedQu
         )
       : await taken(consoleApi.POST('/api/saved', { body: { kind, name, body: asked } }));
     thing.value = answer.thing;
-    savedBody.value = asked;
+    savedText.value = JSON.stringify(asked);
   }
 
   async function share(): Promise<void> {
@@ -53,5 +53,6 @@ export function useSavedQuestion(kind: Kind, body: Readonly<Ref<Body>>): SavedQu
     thing.value = (await taken(consoleApi.DELETE('/api/saved/{id}/link', { params: { path } }))).thing;
   }
 
-  return { thing, isChanged: computed(() => savedBody.value !== body.value), save, share, unshare };
+  const isChanged = computed(() => savedText.value !== JSON.stringify(body()));
+  return { thing, isChanged, save, share, unshare };
 }

@@ -98,7 +98,7 @@ it('what was read before is there without a connection', async () => {
   await button(page, 'Save…').click();
   await field(page, 'Name').last().fill('Pier');
   await button(page, 'Save').click();
-  await page.getByRole('link', { name: 'Open it among your recipes' }).click();
+  await page.getByRole('link', { name: 'Open it among what you saved' }).click();
   await heading(page, 'Pier').waitFor();
   await page.getByRole('row').nth(1).waitFor();
   await page.getByRole('link', { name: 'Recipes and evenings' }).click();

@@ -30,7 +30,10 @@ export async function builtClient(): Promise<string> {
   return folder ?? buildClient();
 }
 
-function serverOf(folder: string): Server {
+/** What a file's text is served as, by its path; as it may change while the console is served. */
+export type Edits = Map<string, (text: string) => string>;
+
+function serverOf(folder: string, edits: Edits): Server {
   return createServer((request, response) => {
     const { pathname } = new URL(request.url ?? '/', 'http://localhost');
     const isFile = extname(pathname) !== '';
@@ -39,7 +42,8 @@ function serverOf(folder: string): Server {
       (content) => {
         response.setHeader('Content-Type', TYPES[extname(path)] ?? 'application/octet-stream');
         response.setHeader('Content-Security-Policy', CSP);
-        response.end(content);
+        const edit = edits.get(pathname);
+        response.end(edit ? edit(content.toString()) : content);
       },
       () => response.writeHead(404).end(),
     );
@@ -47,8 +51,8 @@ function serverOf(folder: string): Server {
 }
 
 /** Serves the built console on a free port of loopback, every screen's address answered by the one page. */
-export async function serveConsole(): Promise<ServedConsole> {
-  const server = serverOf(await builtClient());
+export async function serveConsole(edits: Edits = new Map()): Promise<ServedConsole> {
+  const server = serverOf(await builtClient(), edits);
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
   const { port } = server.address() as AddressInfo;
   return {

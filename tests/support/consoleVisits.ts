@@ -14,7 +14,7 @@ export interface ConsoleVisits {
 }
 
 /** One served console and one Chromium for a file of tests, a context for each visit. */
-export function consoleVisits(serve: () => Promise<ServedConsole> = serveConsole): ConsoleVisits {
+export function consoleVisits(serve: () => Promise<ServedConsole> = () => serveConsole()): ConsoleVisits {
   let browser: Browser;
   let served: ServedConsole;
 
