@@ -1,5 +1,11 @@
 import { parseCivilDate, formatCivilDate, type CivilDate } from '../../shared/time/civilDate';
-import { clockTimeAt, eveningDateAt, instantOfClock, isClockTime } from '../../shared/time/clockTime';
+import {
+  clockTimeAt,
+  eveningDateAt,
+  instantOfClock,
+  isClockTime,
+  type ClockPlace,
+} from '../../shared/time/clockTime';
 import { formatInstant, parseInstant } from '../../shared/time/instant';
 import { isTimeZone, timeZoneAt } from '../../shared/time/zone';
 import { valueAt, withValueAt, type Body, type Path } from './body';
@@ -45,6 +51,13 @@ export function zoneOfBody({ latitude, longitude, timeZone }: Body): string | nu
     : null;
 }
 
+/** Where a body's clock hangs; null where place or zone are none. */
+export function clockPlaceOf(body: Body): ClockPlace | null {
+  const timeZone = zoneOfBody(body);
+  const { longitude } = body;
+  return timeZone !== null && isBetween(longitude, -180, 180) ? { timeZone, longitudeDeg: longitude } : null;
+}
+
 function dateOfBody({ date }: Body): CivilDate | null {
   return typeof date === 'string' ? parseCivilDate(date) : null;
 }
@@ -52,26 +65,26 @@ function dateOfBody({ date }: Body): CivilDate | null {
 /** The fields that one calculator takes, with whole instants in the place of clock times. */
 export function questionOf(body: Body, takes: (name: string) => boolean, nowMs: number): Body {
   const part = Object.fromEntries(Object.entries(body).filter(([name]) => takes(name)));
-  const zone = zoneOfBody(body);
-  const date = body.date === undefined && zone ? eveningDateAt(nowMs, zone) : dateOfBody(body);
-  if (!zone || !date) return part;
+  const clock = clockPlaceOf(body);
+  const date = body.date === undefined && clock ? eveningDateAt(nowMs, clock) : dateOfBody(body);
+  if (!clock || !date) return part;
   return mapInstants(part, (text) => {
-    const ms = instantOfClock(date, text, zone);
-    return ms === null ? text : formatInstant(ms, zone);
+    const ms = instantOfClock(date, text, clock);
+    return ms === null ? text : formatInstant(ms, clock.timeZone);
   });
 }
 
 /** A ladder's question as the page holds it: with a date, and clock times instead of instants. */
 export function pageBodyOf(question: Body): Body {
-  const zone = zoneOfBody(question);
+  const clock = clockPlaceOf(question);
   const held = valueAt(question, ['testFrame', 'at']);
   const firstMs = typeof held === 'string' ? parseInstant(held) : null;
-  if (!zone || firstMs === null) return question;
-  const date = question.date ?? formatCivilDate(eveningDateAt(firstMs, zone));
+  if (!clock || firstMs === null) return question;
+  const date = question.date ?? formatCivilDate(eveningDateAt(firstMs, clock));
   return {
     ...mapInstants(question, (text) => {
       const ms = parseInstant(text);
-      return ms === null ? text : clockTimeAt(ms, zone);
+      return ms === null ? text : clockTimeAt(ms, clock.timeZone);
     }),
     date,
   };
@@ -81,5 +94,5 @@ export function pageBodyOf(question: Body): Body {
 export function isUnjudged(body: Body, pointer: string): boolean {
   const isTime = instantPaths(body).some((path) => `/${path.join('/')}` === pointer);
   const held = valueAt(body, pointer.slice(1).split('/'));
-  return isTime && isClockTime(held) && (zoneOfBody(body) === null || dateOfBody(body) === null);
+  return isTime && isClockTime(held) && (clockPlaceOf(body) === null || dateOfBody(body) === null);
 }
