@@ -1,6 +1,7 @@
+import type { Field } from '../../shared/contract/field';
 import type { DayEvent, Rung, TurningPoint } from './eveningAnswers';
 import { choiceTitle } from './choiceTitle';
-import { formatNumber } from './formatQuantity';
+import { valueText } from './valueText';
 
 /** The clock of an instant that is told in the place's own time: "18:45", with seconds "18:45:10". */
 export const clockText = (instant: string, hasSeconds = false): string =>
@@ -51,14 +52,13 @@ export function untilText(ms: number): string {
   return minutes < 60 ? `${minutes} min` : `${Math.floor(minutes / 60)} h ${minutes % 60} min`;
 }
 
-const valueOf = (value: unknown): string => {
-  if (typeof value === 'number') return formatNumber(value);
-  if (Array.isArray(value)) return value.map(valueOf).join(', ');
-  return typeof value === 'string' ? value : readBack(Object.values((value ?? {}) as object));
-};
-
-/** What is set in a folded part, in a line. */
-export function readBack(values: readonly unknown[]): string {
-  const said = values.filter((value) => value !== undefined && value !== null).map(valueOf);
-  return said.filter((text) => text !== '').join(', ') || 'not set';
+/** What is set in a folded part, in a line: each field by its title, a group's by their own. */
+export function readBack(fields: readonly Field[], body: Readonly<Record<string, unknown>>): string {
+  const said = fields.flatMap((field) => {
+    const value = body[field.name];
+    if (value === undefined || value === null) return [];
+    const text = valueText(field, value);
+    return text === '' ? [] : [field.kind === 'group' ? text : `${field.title} ${text}`];
+  });
+  return said.join(', ') || 'not set';
 }
