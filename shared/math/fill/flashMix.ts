@@ -90,20 +90,35 @@ export function keysFor(b: MixBounds, l1: number, l2: number): readonly [number,
   return [least, Math.min(b.sumHigh - atMost, b.ratioHigh * atMost)];
 }
 
-/** Goes through the ways to set the fills that bounds leave room for, each with its keys; true from `visit` ends it. */
+/**
+ * Goes through the ways to set the fills that bounds leave room for, each with its keys as {@link keysFor} gives them;
+ * true from `visit` ends it. Most of a search is spent here, so it makes nothing on the way.
+ */
 export function someFill(
   { fills, keys }: FlashGroup,
   b: MixBounds,
   visit: (fill: number, leastKey: number, mostKey: number) => boolean,
 ): boolean {
-  const keyMost = keys.reach[keys.reach.length - 1] ?? 0;
-  const least = Math.max(b.sumLow / (1 + b.ratioHigh), b.sumLow - keyMost);
-  const most = b.sumHigh / (1 + b.ratioLow);
-  for (let i = firstAtLeast(fills.reach, least); i < fills.low.length; i++) {
-    const low = fills.low[i] ?? 0;
-    if (low > most) break;
-    if ((fills.high[i] ?? 0) < least || (b.needsFill && (fills.used[i] ?? 0) === 0)) continue;
-    const [leastKey, mostKey] = keysFor(b, low, fills.high[i] ?? 0);
+  const { sumLow, sumHigh, ratioLow, ratioHigh, needsFill } = b;
+  const { low: fillLow, high: fillHigh, used } = fills;
+  const isRatioFree = ratioHigh === Infinity;
+  const lowEdge = sumLow / (1 + ratioHigh);
+  const highEdge = sumHigh / (1 + ratioLow);
+  const leastEdge = sumLow / (1 + ratioLow);
+  const mostEdge = sumHigh / (1 + ratioHigh);
+  const least = Math.max(lowEdge, sumLow - (keys.reach[keys.reach.length - 1] ?? 0));
+  for (let i = firstAtLeast(fills.reach, least); i < fillLow.length; i++) {
+    const from = fillLow[i] ?? 0;
+    if (from > highEdge) break;
+    const to = fillHigh[i] ?? 0;
+    if (to < least || (needsFill && used[i] === 0)) continue;
+    const low = from > lowEdge ? from : lowEdge;
+    const high = to < highEdge ? to : highEdge;
+    if (low > high) continue;
+    const atLeast = clamp(leastEdge, low, high);
+    const leastKey = Math.max(0, sumLow - atLeast, ratioLow * atLeast);
+    const atMost = isRatioFree ? low : clamp(mostEdge, low, high);
+    const mostKey = isRatioFree ? sumHigh - low : Math.min(sumHigh - atMost, ratioHigh * atMost);
     if (leastKey <= mostKey && visit(i, leastKey, mostKey)) return true;
   }
   return false;

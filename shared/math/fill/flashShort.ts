@@ -2,6 +2,7 @@ import { canDo } from './assignFlashes';
 import { caseOf, someNearBackground, type FillCase, type FillProblem, type MissLimits } from './fillProblem';
 import {
   boundsWithin,
+  keysFor,
   someFill,
   swappedBounds,
   swappedGroup,
@@ -16,16 +17,22 @@ const MOST_STOPS = 60;
 
 const alike = (count: number) => ({ sum: count, ratio: count });
 
-/** By how much the nearest weaker way falls short of a span of light, stops. */
+/** By how much the nearest weaker way falls short of a span of light, as a factor. */
 function weakerBy({ reach }: RoleSums, last: number, least: number): number {
   const nearest = reach[last] ?? 0;
-  return nearest > 0 ? Math.max(0, Math.log2(least / nearest)) : Infinity;
+  return nearest > 0 ? least / nearest : Infinity;
 }
 
-/** By how much the nearest stronger way exceeds a span of light, stops. */
+/** By how much the nearest stronger way exceeds a span of light, as a factor. */
 function strongerBy({ low }: RoleSums, last: number, least: number, most: number): number {
   const nearest = low[last + 1];
-  return nearest === undefined || !(most > 0) ? Infinity : Math.log2(nearest / Math.max(most, least));
+  return nearest === undefined || !(most > 0) ? Infinity : nearest / Math.max(most, least);
+}
+
+/** By how much keys of at most so much are too weak at least, whatever the fills: they need no less than the bounds do. */
+function weakAtLeast({ keys, fills }: FlashGroup, b: MixBounds): number {
+  const [least, most] = keysFor(b, 0, fills.reach[fills.reach.length - 1] ?? 0);
+  return least > most ? Infinity : Math.log2(least / (keys.reach[keys.reach.length - 1] ?? 0));
 }
 
 /**
@@ -33,21 +40,24 @@ function strongerBy({ low }: RoleSums, last: number, least: number, most: number
  * less than that.
  */
 function roleOff(group: FlashGroup, b: MixBounds, isWeak: boolean, best: number): number {
+  if (isWeak && weakAtLeast(group, b) > best) return best;
   const keyMost = group.keys.reach[group.keys.reach.length - 1] ?? 0;
   // The other role may do with what this one gives once it is moved, so nothing is left out for its present most.
   const most = isWeak ? keyMost * 2 ** best : keyMost;
   const unbounded = { fills: group.fills, keys: { ...group.keys, reach: Float64Array.of(most) } };
-  let off = best;
+  let factor = Infinity;
   let last: number | null = null;
   someFill(unbounded, b, (_, leastKey, mostKey) => {
     last = lastAtMostFrom(group.keys.low, mostKey, last);
-    off = Math.min(
-      off,
-      isWeak ? weakerBy(group.keys, last, leastKey) : strongerBy(group.keys, last, leastKey, mostKey),
-    );
-    return off <= 0;
+    const by = isWeak
+      ? weakerBy(group.keys, last, leastKey)
+      : strongerBy(group.keys, last, leastKey, mostKey);
+    if (by < factor) factor = by;
+    return factor <= 1;
   });
-  return off;
+  // A weak role is never off by less than nothing; a strong one's nearest way lies above the span.
+  const off = Math.log2(factor);
+  return Math.min(best, isWeak ? Math.max(0, off) : off);
 }
 
 /** By how much key and fill together are too weak: both come nearer by the same. */
