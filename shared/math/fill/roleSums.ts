@@ -26,8 +26,14 @@ const PLACE_MASK = 32_767;
 
 /** The most that any entry up to each gives. */
 function reachOf(high: Float64Array): Float64Array {
+  const reach = new Float64Array(high.length);
   let most = 0;
-  return high.map((light) => (most = Math.max(most, light)));
+  for (let i = 0; i < high.length; i++) {
+    const light = high[i] ?? 0;
+    if (light > most) most = light;
+    reach[i] = most;
+  }
+  return reach;
 }
 
 /**
@@ -39,7 +45,9 @@ function placesByLight(light: Float64Array): Uint32Array {
   const words = new Uint32Array(keys.buffer);
   for (let i = 0; i < light.length; i++) words[2 * i] = ((words[2 * i] ?? 0) & ~PLACE_MASK) | i;
   keys.sort();
-  return Uint32Array.from(light, (_, i) => (words[2 * i] ?? 0) & PLACE_MASK);
+  const places = new Uint32Array(light.length);
+  for (let i = 0; i < light.length; i++) places[i] = (words[2 * i] ?? 0) & PLACE_MASK;
+  return places;
 }
 
 /**
@@ -53,48 +61,63 @@ function placesByLight(light: Float64Array): Uint32Array {
 export function roleSums(flashes: readonly FlashLevels[]): RoleSums {
   const ways = flashes.reduce((product, { powers }) => product * powers.length, 1);
   if (ways > MOST_WAYS) throw new RangeError(`there are ${ways} ways to set the flashes of a role`);
-  const [low, high] = [new Float64Array(ways), new Float64Array(ways)];
-  let block = ways;
-  for (const one of flashes) {
-    block /= one.powers.length;
-    for (let i = 0; i < ways; i++) {
-      const level = Math.floor(i / block) % one.powers.length;
-      low[i] = (low[i] ?? 0) + (one.low[level] ?? 0);
-      high[i] = (high[i] ?? 0) + (one.high[level] ?? 0);
-    }
-  }
-  const places = placesByLight(low);
-  const code = Int32Array.from(places);
-  const rising = Float64Array.from(places, (place) => high[place] ?? 0);
+  const sums = flashes.reduce(withFlash, NONE_ON);
+  const places = placesByLight(sums.low);
+  const rising = inOrderOf(places, sums.high);
+  const used = new Uint8Array(ways);
+  for (let i = 0; i < ways; i++) used[i] = sums.used[places[i] ?? 0] ?? 0;
   return {
     flashes,
-    low: Float64Array.from(places, (place) => low[place] ?? 0),
+    low: inOrderOf(places, sums.low),
     high: rising,
     reach: reachOf(rising),
-    ...useOf(flashes, code),
-    code,
+    used,
+    power: inOrderOf(places, sums.power),
+    code: Int32Array.from(places),
   };
 }
 
-/** How many flashes are on in each way, and the power of the one that works hardest. */
-function useOf(flashes: readonly FlashLevels[], code: Int32Array): Pick<RoleSums, 'used' | 'power'> {
-  const used = new Uint8Array(code.length);
-  const power = new Float64Array(code.length);
-  for (let i = 0; i < code.length; i++) {
-    let digits = code[i] ?? 0;
-    for (let f = flashes.length - 1; f >= 0; f--) {
-      const { powers } = flashes[f] as FlashLevels;
-      const fraction = powers[digits % powers.length] ?? 0;
-      digits = Math.floor(digits / powers.length);
-      if (fraction > 0) used[i] = (used[i] ?? 0) + 1;
-      if (fraction > (power[i] ?? 0)) power[i] = fraction;
+type Ways = Pick<RoleSums, 'low' | 'high' | 'used' | 'power'>;
+
+const NONE_ON: Ways = {
+  low: new Float64Array(1),
+  high: new Float64Array(1),
+  used: new Uint8Array(1),
+  power: new Float64Array(1),
+};
+
+/** Each way as it was with each power of one flash more. */
+function withFlash(before: Ways, { powers, low, high }: FlashLevels): Ways {
+  const ways = before.low.length * powers.length;
+  const after = {
+    low: new Float64Array(ways),
+    high: new Float64Array(ways),
+    used: new Uint8Array(ways),
+    power: new Float64Array(ways),
+  };
+  for (let i = 0, at = 0; i < before.low.length; i++)
+    for (let level = 0; level < powers.length; level++, at++) {
+      const [fraction, hardest] = [powers[level] ?? 0, before.power[i] ?? 0];
+      after.low[at] = (before.low[i] ?? 0) + (low[level] ?? 0);
+      after.high[at] = (before.high[i] ?? 0) + (high[level] ?? 0);
+      after.used[at] = (before.used[i] ?? 0) + (fraction > 0 ? 1 : 0);
+      after.power[at] = fraction > hardest ? fraction : hardest;
     }
-  }
-  return { used, power };
+  return after;
 }
 
-const timesAll = (light: Float64Array, factor: number) =>
-  factor === 1 ? light : light.map((one) => one * factor);
+function inOrderOf(places: Uint32Array, from: Float64Array): Float64Array {
+  const ordered = new Float64Array(places.length);
+  for (let i = 0; i < places.length; i++) ordered[i] = from[places[i] ?? 0] ?? 0;
+  return ordered;
+}
+
+function timesAll(light: Float64Array, factor: number): Float64Array {
+  if (factor === 1) return light;
+  const scaled = new Float64Array(light.length);
+  for (let i = 0; i < light.length; i++) scaled[i] = (light[i] ?? 0) * factor;
+  return scaled;
+}
 
 /** The same ways with the least and the most of their light times a factor each. */
 export function scaledSums(sums: RoleSums, lowFactor: number, highFactor = lowFactor): RoleSums {
