@@ -29,9 +29,26 @@ function changeOften(page: Page): Promise<boolean> {
   }, CHANGES);
 }
 
+/** What the loop of `slownessOf` takes on a quiet machine of two cores such as the goals were set for, ms. */
+const QUIET_LOOP_MS = 2.7;
+
+/** How many times slower the machine is at this moment than a quiet one: other programs share its cores and caches. */
+async function slownessOf(page: Page): Promise<number> {
+  const loopMs = await page.evaluate(() => {
+    const once = () => {
+      const from = performance.now();
+      const cells = new Float64Array(4096);
+      for (let i = 0; i < 2_000_000; i++) cells[i & 4095] = (cells[(i * 17) & 4095] ?? 0) * 0.5 + i;
+      return performance.now() - from + (cells[1] ?? 0) * 0;
+    };
+    return Math.min(...Array.from({ length: 5 }, once));
+  });
+  return Math.max(1, loopMs / QUIET_LOOP_MS);
+}
+
 /**
  * Milliseconds of the processor for one change, until answer and drawings are laid out: the page's own work alone,
- * however busy other programs keep the machine.
+ * and as on a quiet machine, however busy other programs keep this one.
  */
 async function workOfChange(page: Page): Promise<number> {
   const client = await page.context().newCDPSession(page);
@@ -43,25 +60,23 @@ async function workOfChange(page: Page): Promise<number> {
   expect(await changeOften(page)).toBe(true);
   let least = Infinity;
   for (let round = 0; round < ROUNDS; round += 1) {
+    const slowness = await slownessOf(page);
     const before = await worked();
     await changeOften(page);
-    least = Math.min(least, ((await worked()) - before) * (1000 / CHANGES));
+    least = Math.min(least, ((await worked()) - before) * (1000 / CHANGES / slowness));
   }
   return least;
 }
 
-/** A search over thousands of combinations; its answer may take two frames. */
-const SEARCHES = new Set(['fill/recipes']);
-
 it.each(calculatorList.map(({ id }) => id).filter((id) => id !== 'light/scenes'))(
-  '%s answers and draws a change within a frame, a search within two',
+  '%s answers and draws a change within a frame',
   async (id) => {
     await visiting({}, async (page) => {
       await openScreen(page, `/calculators/${id}`);
       await page.locator('.answer figure').first().waitFor();
       const workMs = await workOfChange(page);
       expect(workMs).toBeGreaterThan(0);
-      expect(workMs).toBeLessThan(FRAME_MS * (SEARCHES.has(id) ? 2 : 1));
+      expect(workMs).toBeLessThan(FRAME_MS);
     });
   },
 );
