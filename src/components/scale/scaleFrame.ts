@@ -35,17 +35,20 @@ export function heldWithin(frame: ScaleFrame, stops: number): { stops: number; i
   return { stops: held, isBeyond: held !== stops };
 }
 
-/** Every how many stops a number stands, so that the numbers do not touch. */
-export function numberedEvery(frame: ScaleFrame): number {
+/**
+ * Every how many stops a number stands, so that the numbers do not touch.
+ * @param apartPx from one number's middle to the next at least
+ */
+export function numberedEvery(frame: ScaleFrame, apartPx = NUMBERS_APART_PX): number {
   const stopPx = pxPerStop(frame);
   const decades = [1, 10, 100, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8];
   const steps = decades.flatMap((ten) => [ten, 2 * ten, 5 * ten]);
-  return steps.find((every) => every * stopPx >= NUMBERS_APART_PX) ?? 1e9;
+  return steps.find((every) => every * stopPx >= Math.max(NUMBERS_APART_PX, apartPx)) ?? 1e9;
 }
 
 /** The ruling: thirds where there is room, stops, and the numbered ones among them; these alone where it is close. */
-export function ticksOf(frame: ScaleFrame, parts: 1 | 3 = 3): Tick[] {
-  const every = numberedEvery(frame);
+export function ticksOf(frame: ScaleFrame, parts: 1 | 3 = 3, apartPx?: number): Tick[] {
+  const every = numberedEvery(frame, apartPx);
   const stopPx = pxPerStop(frame);
   const perStop = stopPx >= THIRDS_FROM_PX ? parts : stopPx >= STEPS_FROM_PX ? 1 : 1 / every;
   const first = Math.ceil(frame.fromStops * perStop);

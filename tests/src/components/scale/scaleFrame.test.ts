@@ -56,6 +56,9 @@ describe('the axis', () => {
     expect(numberedEvery(frame)).toBe(1);
     expect(numberedEvery({ ...frame, widthPx: 600 })).toBe(2);
     expect(numberedEvery({ ...frame, widthPx: 328 })).toBe(5);
+    // Long numbers stand farther apart, short ones no nearer.
+    expect(numberedEvery({ ...frame, widthPx: 600 }, 90)).toBe(5);
+    expect(numberedEvery({ ...frame, widthPx: 600 }, 10)).toBe(2);
   });
 });
 
