@@ -33,7 +33,7 @@ interface Drawing {
 /** To the right of its stretch where that leaves room, else to the left, else above it. */
 function wordsBeside({ label = '' }: Span, [leftPx, rightPx]: [number, number], drawing: Drawing) {
   const textPx = textWidthPx(label, drawing.sizePx);
-  if (rightPx + GAP_PX + textPx <= drawing.widthPx)
+  if (label === '' || rightPx + GAP_PX + textPx <= drawing.widthPx)
     return { xPx: rightPx + GAP_PX, anchor: 'start', isAbove: false } as const;
   if (leftPx - GAP_PX - textPx >= 0) return { xPx: leftPx - GAP_PX, anchor: 'end', isAbove: false } as const;
   const xPx = Math.max(0, Math.min(leftPx, drawing.widthPx - textPx));
